@@ -1,6 +1,7 @@
 /// Everything one run knows, before it is written down: the single input of all writers.
 #pragma once
 
+#include <cstdint>
 #include <optional>
 #include <string>
 #include <vector>
@@ -52,6 +53,9 @@ enum class Task { report, survey, chart, reach, vouch, name, check };
 
 struct Answer {
   Task task = Task::report;
+  std::string program_version;          ///< "0.1.0"
+  std::string params_sha256;            ///< of the parameter files read (Facts::sha256)
+  std::uint64_t seed = 1;               ///< of every random choice in the run
   Case input;
   Mixture mixture;                      ///< without zero-amount components
   std::string model_kind;               ///< "unifac-dortmund", "nrtl", ...
@@ -65,6 +69,7 @@ struct Answer {
   std::vector<MeasuredMatch> measured_only;          ///< on file for these components, not computed
   std::optional<Chart> chart;
   std::optional<Position> position;     ///< of the feed
+  std::optional<StabilityResult> feed_stability;     ///< of the feed at its bubble point
   std::optional<Reach> reach;
   std::vector<Evidence> product_evidence;            ///< per product of `reach`
   std::vector<Caution> cautions;
