@@ -34,7 +34,8 @@ class Mixture {
  public:
   Mixture() = default;
   /// `correction` is an extra Redlich-Kister gE/RT added to the model: used to bound a missing pair.
-  Mixture(std::vector<MixtureComponent> components, ActivityModel activity, std::optional<RedlichKister> correction = {});
+  Mixture(std::vector<MixtureComponent> components, ActivityModel activity,
+          std::optional<RedlichKister> correction = {});
 
   [[nodiscard]] int size() const { return static_cast<int>(components_.size()); }
   [[nodiscard]] const std::vector<MixtureComponent>& components() const { return components_; }
@@ -54,6 +55,15 @@ class Mixture {
   /// ln K_i = f_i for all components.
   template <class S>
   [[nodiscard]] Vec<S> ln_k(const S& temperature_K, const Vec<S>& x, double ln_pressure_Pa) const;
+
+  /// ln K of all components with its analytic gradient (the x as independent numbers, see models/gradient.hpp).
+  /// S = double or Interval.
+  template <class S>
+  void ln_k_with_gradient(const S& temperature_K, const Vec<S>& x, double ln_pressure_Pa,
+                          LnGammaGradient<S>& out) const;
+
+  /// True when ln gamma changes with temperature at constant composition.
+  [[nodiscard]] bool depends_on_temperature() const;
 
   /// The same mixture restricted to some of its components (order kept). An absent component changes
   /// nothing for the others, so a face is a smaller mixture.

@@ -63,7 +63,40 @@ class Vec {
   }
 
  private:
-  std::array<S, kMaxComponents> data_{};
+  std::array<S, kMaxComponents> data_;  // not cleared: a model call fills what it uses
+  int size_ = 0;
+};
+
+/// Square matrix of up to kMaxComponents rows; row i belongs to component i.
+template <class S>
+class Matrix {
+ public:
+  Matrix() = default;
+  explicit Matrix(int size) : size_(size) { expects(size >= 0 && size <= kMaxComponents, "Matrix: size out of range"); }
+  Matrix(int size, const S& value) : Matrix(size) {
+    for (int i = 0; i < size; ++i) {
+      for (int j = 0; j < size; ++j) {
+        (*this)(i, j) = value;
+      }
+    }
+  }
+  [[nodiscard]] int size() const { return size_; }
+  S& operator()(int i, int j) { return data_[static_cast<std::size_t>(i * kMaxComponents + j)]; }
+  const S& operator()(int i, int j) const { return data_[static_cast<std::size_t>(i * kMaxComponents + j)]; }
+  /// Rows and columns of some of the components.
+  template <class Indices>
+  [[nodiscard]] Matrix face(const Indices& members) const {
+    Matrix result(members.size());
+    for (int i = 0; i < members.size(); ++i) {
+      for (int j = 0; j < members.size(); ++j) {
+        result(i, j) = (*this)(members[i], members[j]);
+      }
+    }
+    return result;
+  }
+
+ private:
+  std::array<S, static_cast<std::size_t>(kMaxComponents) * kMaxComponents> data_;
   int size_ = 0;
 };
 

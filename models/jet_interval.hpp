@@ -1,0 +1,54 @@
+/// The operators between double and ceres::Jet<Interval, N> that neither type provides, found by argument-dependent
+/// lookup in namespace stillshed (Interval's own).
+#pragma once
+
+#include <ceres/jet.h>
+
+#include "models/interval.hpp"
+
+namespace stillshed {
+
+template <int N>
+using IntervalJet = ceres::Jet<Interval, N>;
+
+template <int N>
+IntervalJet<N> operator+(const IntervalJet<N>& a, double b) {
+  IntervalJet<N> r = a;
+  r.a = a.a + b;
+  return r;
+}
+template <int N>
+IntervalJet<N> operator+(double a, const IntervalJet<N>& b) {
+  return b + a;
+}
+template <int N>
+IntervalJet<N> operator-(const IntervalJet<N>& a, double b) {
+  return a + (-b);
+}
+template <int N>
+IntervalJet<N> operator-(double a, const IntervalJet<N>& b) {
+  return (-b) + a;
+}
+template <int N>
+IntervalJet<N> operator*(const IntervalJet<N>& a, double b) {
+  IntervalJet<N> r;
+  r.a = a.a * b;
+  for (int k = 0; k < N; ++k) {
+    r.v[k] = a.v[k] * b;
+  }
+  return r;
+}
+template <int N>
+IntervalJet<N> operator*(double a, const IntervalJet<N>& b) {
+  return b * a;
+}
+template <int N>
+IntervalJet<N> operator/(const IntervalJet<N>& a, double b) {
+  return a * IntervalJet<N>(Interval(1.0) / b);
+}
+template <int N>
+IntervalJet<N> operator/(double a, const IntervalJet<N>& b) {
+  return IntervalJet<N>(Interval(a)) / b;
+}
+
+}  // namespace stillshed

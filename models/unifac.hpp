@@ -1,0 +1,113 @@
+/// UNIFAC group-contribution activity coefficients: the original model and modified UNIFAC (Dortmund).
+///
+///   combinatorial and residual parts as in models/group_core.hpp, sites = main groups in use
+///   psi_mk = exp(-(a_mk/T + b_mk + c_mk T))   (b = c = 0 for the original model), T in K
+///   exponent p = 1 (original), 3/4 (Dortmund)
+///
+/// Source    A. Fredenslund, R. L. Jones, J. M. Prausnitz, AIChE J. 21 (1975) 1086-1099; U. Weidlich, J. Gmehling,
+///           Ind. Eng. Chem. Res. 26 (1987) 1372-1381 (both from memory); tables: params/README.md.
+/// Valid     the original table is recommended for 275 to 425 K (from memory).
+/// Errors    a pair of main groups without parameters is an InputError that names both groups and the components;
+///           it is never taken as zero unless the caller asks for fillers (see UnifacOptions).
+#pragma once
+
+#include <string>
+#include <utility>
+#include <vector>
+
+#include "models/group_core.hpp"
+#include "params/records.hpp"
+
+namespace stillshed {
+
+/// Two main groups without published parameters, and the components that need them.
+struct MissingGroupPair {
+  int main_i = 0;
+  int main_j = 0;
+  int component_i = 0;
+  int component_j = 0;
+};
+
+struct UnifacOptions {
+  /// Take missing group pairs as psi = 1. Only for bounding a missing pair with an extra correction
+  /// (models/mixture.hpp).
+  bool fill_missing = false;
+};
+
+class Unifac {
+ public:
+  Unifac() = default;
+  /// `names` are used in messages. A component without groups is an InputError too.
+  Unifac(const GroupTable& table, const std::vector<GroupAssignment>& components, const std::vector<std::string>& names,
+         UnifacOptions options = {});
+  [[nodiscard]] int size() const { return core_.size(); }
+  [[nodiscard]] bool depends_on_temperature() const { return true; }
+  [[nodiscard]] Unifac face(const Members& members) const;
+  [[nodiscard]] GroupModel model() const { return model_; }
+
+  template <class S>
+  [[nodiscard]] Vec<S> combinatorial(const Vec<S>& x) const {
+    return core_.combinatorial(x);
+  }
+  template <class S>
+  [[nodiscard]] Vec<S> residual(const S& temperature_K, const Vec<S>& x) const {
+    SitePsi<S> psi;
+    fill(temperature_K, false, psi);
+    return core_.residual(psi, x);
+  }
+  template <class S>
+  [[nodiscard]] Vec<S> ln_gamma(const S& temperature_K, const Vec<S>& x) const {
+    Vec<S> result = core_.combinatorial(x);
+    const Vec<S> rest = residual(temperature_K, x);
+    for (int i = 0; i < size(); ++i) {
+      result[i] += rest[i];
+    }
+    return result;
+  }
+  template <class S>
+  void ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& x, LnGammaGradient<S>& out) const {
+    SitePsi<S> psi;
+    fill(temperature_K, true, psi);
+    core_.ln_gamma_with_gradient(psi, x, true, out);
+  }
+
+ private:
+  template <class S>
+  void fill(const S& T, bool slopes, SitePsi<S>& psi) const {
+    using std::exp;
+    const S inverse_T = 1.0 / T;
+    for (int i = 0; i < core_.sites(); ++i) {
+      for (int j = 0; j < core_.sites(); ++j) {
+        const auto m = static_cast<std::size_t>(i);
+        const auto k = static_cast<std::size_t>(j);
+        const GroupInteraction& p = interaction_[m][k];
+        if (i == j) {
+          psi.psi[m][k] = S(1.0);
+          if (slopes) {
+            psi.ln_slope[m][k] = S(0.0);
+          }
+          continue;
+        }
+        S exponent = p.a_K * inverse_T + p.b;
+        if (p.c_per_K != 0.0) {
+          exponent += p.c_per_K * T;
+        }
+        psi.psi[m][k] = exp(-exponent);
+        if (slopes) {
+          psi.ln_slope[m][k] = p.a_K * (inverse_T * inverse_T) - p.c_per_K;
+        }
+      }
+    }
+  }
+
+  GroupModel model_ = GroupModel::unifac;
+  GroupCore core_;
+  std::vector<int> main_groups_;  ///< of the sites
+  std::array<std::array<GroupInteraction, kMaxSites>, kMaxSites> interaction_{};
+};
+
+/// Every pair of main groups that two of these components need and the table does not have.
+[[nodiscard]] std::vector<MissingGroupPair> missing_group_pairs(const GroupTable& table,
+                                                                const std::vector<GroupAssignment>& components);
+
+}  // namespace stillshed
