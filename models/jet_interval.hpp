@@ -51,4 +51,16 @@ IntervalJet<N> operator/(double a, const IntervalJet<N>& b) {
   return IntervalJet<N>(Interval(a)) / b;
 }
 
+/// z^2, tighter than z * z for an interval; any Jet.
+template <class S, int N>
+ceres::Jet<S, N> square(const ceres::Jet<S, N>& z) {
+  ceres::Jet<S, N> r;
+  r.a = square(z.a);
+  const S twice = z.a * 2.0;
+  for (int k = 0; k < N; ++k) {
+    r.v[k] = twice * z.v[k];
+  }
+  return r;
+}
+
 }  // namespace stillshed

@@ -1,18 +1,22 @@
 /// Sums and means over mole fractions, written once per scalar so that one template gives tight intervals.
 ///
 ///   weighted_mean(w, v) = sum_i w_i v_i / sum_i w_i     w_i >= 0, not all zero
+///   ratio_of_sums(x, u, s) = sum_i x_i u_i / sum_i x_i s_i     x_i >= 0, s_i > 0: the mean of u_i/s_i with weights x_i s_i
 ///   simplex_sum(x, v)   = sum_i x_i v_i                 for mole fractions x, sum(x) = 1
 ///
-/// For Interval, `weighted_mean` is the exact range over all weights and values of the box: the largest value is
-/// reached with every weight at an end point, upper for the values above the mean, lower below (a linear-fractional
-/// function on a box). `simplex_sum` is the exact range over the part of the box with sum(x) = 1: this is the only
-/// place where an enclosure uses that the mole fractions add up, so Interval results hold for points on the simplex
-/// only.
+/// Interval  `weighted_mean` is the range over all weights and values of the box: the largest value is reached with
+///           every weight at an end point, upper for the values above the mean, lower below (a linear-fractional
+///           function on a box). `simplex_sum` is the range over the part of the box with sum(x) = 1. This is the only
+///           place where an enclosure uses that the mole fractions add up: Interval results hold for the points of the
+///           box that lie on the simplex, which is where mole fractions are.
+/// Jet       d mean = sum (w_j/W) dv_j + sum (dw_j/W) (v_j - mean): again a mean, again tight.
 #pragma once
 
 #include <ceres/jet.h>
 
+#include <algorithm>
 #include <array>
+#include <limits>
 
 #include "models/interval.hpp"
 #include "models/jet_interval.hpp"
@@ -21,6 +25,8 @@ namespace stillshed {
 
 /// Most terms of one sum: components or main groups.
 inline constexpr int kMaxTerms = 24;
+
+// --- double -------------------------------------------------------------------------------------------------------
 
 inline double weighted_mean(const double* w, const double* v, int n) {
   double numerator = 0.0;
@@ -32,48 +38,86 @@ inline double weighted_mean(const double* w, const double* v, int n) {
   return numerator / denominator;
 }
 
+inline double simplex_sum(const double* x, const double* v, int n) {
+  double sum = 0.0;
+  for (int i = 0; i < n; ++i) {
+    sum += x[i] * v[i];
+  }
+  return sum;
+}
+
+inline double ratio_of_sums(const double* x, const double* u, const double* s, int n) {
+  return simplex_sum(x, u, n) / simplex_sum(x, s, n);
+}
+
+// --- Interval -----------------------------------------------------------------------------------------------------
+
 namespace means {
 
-/// Upper bound of the mean for end-point values v (as sign * value): sorted threshold rule.
-inline double upper_mean(const Interval* w, const Interval* v, int n, bool lower_side) {
-  std::array<int, kMaxTerms> order{};
-  std::array<double, kMaxTerms> value{};
+using Order = std::array<int, kMaxTerms>;
+using Values = std::array<double, kMaxTerms>;
+
+/// Indices of the values, largest first.
+inline void sort_falling(const Values& value, int n, Order& order) {
   for (int i = 0; i < n; ++i) {
-    value[static_cast<std::size_t>(i)] = lower_side ? -v[i].lower() : v[i].upper();
     int k = i;
-    while (k > 0 && value[static_cast<std::size_t>(order[static_cast<std::size_t>(k - 1)])] <
-                        value[static_cast<std::size_t>(i)]) {
+    const double v = value[static_cast<std::size_t>(i)];
+    while (k > 0 && value[static_cast<std::size_t>(order[static_cast<std::size_t>(k - 1)])] < v) {
       order[static_cast<std::size_t>(k)] = order[static_cast<std::size_t>(k - 1)];
       --k;
     }
     order[static_cast<std::size_t>(k)] = i;
   }
-  // Start with every weight at its lower end; raise them in order of falling value while that raises the mean.
+}
+
+/// Largest mean of these values over the box of weights (sorted threshold rule); NaN when the weights carry nothing.
+inline double largest_mean(const Interval* w, const Values& value, int n) {
+  Order order;
+  sort_falling(value, n, order);
   double numerator = 0.0;
   double denominator = 0.0;
   for (int i = 0; i < n; ++i) {
     numerator += w[i].lower() * value[static_cast<std::size_t>(i)];
     denominator += w[i].lower();
   }
+  // From every weight at its lower end, raise them in order of falling value for as long as that raises the mean.
   for (int k = 0; k < n; ++k) {
     const int i = order[static_cast<std::size_t>(k)];
-    const double v_i = value[static_cast<std::size_t>(i)];
-    if (denominator > 0.0 && v_i * denominator <= numerator) {
+    const double v = value[static_cast<std::size_t>(i)];
+    if (denominator > 0.0 && v * denominator <= numerator) {
       break;
     }
-    numerator += (w[i].upper() - w[i].lower()) * v_i;
-    denominator += w[i].upper() - w[i].lower();
+    const double room = w[i].upper() - w[i].lower();
+    numerator += room * v;
+    denominator += room;
   }
-  return numerator / denominator;
+  // Products and sums below this lose their relative accuracy to underflow.
+  constexpr double kSmallestTotal = 1e-280;
+  return denominator > kSmallestTotal ? numerator / denominator : std::numeric_limits<double>::quiet_NaN();
 }
 
-/// Rounding of the sums above: at most about 2n operations on numbers no larger than n * max|w v|.
-inline double slack(const Interval* v, int n) {
-  double largest = 0.0;
+/// Largest sum x_i value_i over the points of the box with sum(x) = 1: every x at its lower end, what is left of the
+/// unit goes to the largest values first.
+inline double largest_sum(const Interval* x, const Values& value, double left, int n) {
+  Order order;
+  sort_falling(value, n, order);
+  double sum = 0.0;
   for (int i = 0; i < n; ++i) {
-    largest = std::max(largest, v[i].magnitude());
+    sum += x[i].lower() * value[static_cast<std::size_t>(i)];
   }
-  return largest * (8.0 * n + 8.0) * std::numeric_limits<double>::epsilon() + std::numeric_limits<double>::denorm_min();
+  for (int k = 0; k < n && left > 0.0; ++k) {
+    const int i = order[static_cast<std::size_t>(k)];
+    const double take = std::min(left, x[i].upper() - x[i].lower());
+    sum += take * value[static_cast<std::size_t>(i)];
+    left -= take;
+  }
+  return sum;
+}
+
+/// Covers the rounding of the two functions above: fewer than 4 n + 4 operations, each on numbers that are at most
+/// max|v| times the total weight.
+inline double slack(double largest, int n) {
+  return largest * (8.0 * n + 8.0) * std::numeric_limits<double>::epsilon() + 1e-300;
 }
 
 }  // namespace means
@@ -81,21 +125,73 @@ inline double slack(const Interval* v, int n) {
 inline Interval weighted_mean(const Interval* w, const Interval* v, int n) {
   double lowest = std::numeric_limits<double>::infinity();
   double highest = -std::numeric_limits<double>::infinity();
+  means::Values up;
+  means::Values down;
   for (int i = 0; i < n; ++i) {
     if (!(w[i].lower() >= 0.0) || !w[i].is_bounded() || !v[i].is_bounded()) {
       return Interval::whole();
     }
+    up[static_cast<std::size_t>(i)] = v[i].upper();
+    down[static_cast<std::size_t>(i)] = -v[i].lower();
     lowest = std::min(lowest, v[i].lower());
     highest = std::max(highest, v[i].upper());
   }
-  const double room = means::slack(v, n);
-  double upper = means::upper_mean(w, v, n, false) + room;
-  double lower = -means::upper_mean(w, v, n, true) - room;
-  // Whatever the weights, the mean lies between the smallest and the largest value (NaN from 0/0 falls back to that).
-  upper = upper < highest ? upper : highest;
-  lower = lower > lowest ? lower : lowest;
-  return {lower, upper};
+  const double room = means::slack(std::max(-lowest, highest), n);
+  const double upper = means::largest_mean(w, up, n) + room;
+  const double lower = -means::largest_mean(w, down, n) - room;
+  // Whatever the weights, a mean lies between the smallest and the largest value; a NaN falls back to that.
+  return {lower > lowest ? lower : lowest, upper < highest ? upper : highest};
 }
+
+inline Interval simplex_sum(const Interval* x, const Interval* v, int n) {
+  Interval plain(0.0);
+  double low_sum = 0.0;
+  double high_sum = 0.0;
+  double largest = 0.0;
+  bool usable = true;
+  means::Values up;
+  means::Values down;
+  for (int i = 0; i < n; ++i) {
+    usable = usable && x[i].lower() >= 0.0 && x[i].is_bounded() && v[i].is_bounded();
+    plain += x[i] * v[i];
+    low_sum += x[i].lower();
+    high_sum += x[i].upper();
+    up[static_cast<std::size_t>(i)] = v[i].upper();
+    down[static_cast<std::size_t>(i)] = -v[i].lower();
+    largest = std::max(largest, v[i].magnitude());
+  }
+  if (!usable || !(low_sum <= 1.0 && high_sum >= 1.0)) {  // the box misses the simplex: make no use of it
+    return plain;
+  }
+  const double room = means::slack(largest, n);
+  const double upper = means::largest_sum(x, up, 1.0 - low_sum, n) + room;
+  const double lower = -means::largest_sum(x, down, 1.0 - low_sum, n) - room;
+  return both(plain, Interval(lower, upper));
+}
+
+inline Interval ratio_of_sums(const Interval* x, const Interval* u, const Interval* s, int n) {
+  std::array<Interval, kMaxTerms> weight;
+  std::array<Interval, kMaxTerms> value;
+  for (int i = 0; i < n; ++i) {
+    weight[static_cast<std::size_t>(i)] = x[i] * s[i];
+    value[static_cast<std::size_t>(i)] = u[i] / s[i];
+  }
+  return weighted_mean(weight.data(), value.data(), n);
+}
+
+/// The part of an enclosure that mole fractions can take. Off the simplex altogether: unchanged.
+inline Interval fraction_part(const Interval& x) {
+  return x.upper() >= 0.0 && x.lower() <= 1.0 ? both(x, Interval(0.0, 1.0)) : x;
+}
+inline double fraction_part(double x) { return x; }
+template <class S, int N>
+ceres::Jet<S, N> fraction_part(const ceres::Jet<S, N>& x) {
+  ceres::Jet<S, N> part = x;
+  part.a = fraction_part(x.a);
+  return part;
+}
+
+// --- Jets over either ---------------------------------------------------------------------------------------------
 
 template <class S, int N>
 ceres::Jet<S, N> weighted_mean(const ceres::Jet<S, N>* w, const ceres::Jet<S, N>* v, int n) {
@@ -121,65 +217,9 @@ ceres::Jet<S, N> weighted_mean(const ceres::Jet<S, N>* w, const ceres::Jet<S, N>
   return mean;
 }
 
-inline double simplex_sum(const double* x, const double* v, int n) {
-  double sum = 0.0;
-  for (int i = 0; i < n; ++i) {
-    sum += x[i] * v[i];
-  }
-  return sum;
-}
-
-inline Interval simplex_sum(const Interval* x, const Interval* v, int n) {
-  // Greedy: give every x its lower end, then spend the rest of the unit on the largest values first.
-  double result[2] = {0.0, 0.0};
-  Interval plain(0.0);
-  double low_sum = 0.0;
-  double high_sum = 0.0;
-  for (int i = 0; i < n; ++i) {
-    if (!x[i].is_bounded() || !v[i].is_bounded() || !(x[i].lower() >= 0.0)) {
-      return Interval::whole();
-    }
-    plain += x[i] * v[i];
-    low_sum += x[i].lower();
-    high_sum += x[i].upper();
-  }
-  if (!(low_sum <= 1.0 && high_sum >= 1.0)) {  // the box (or rounding) misses the simplex: make no use of it
-    return plain;
-  }
-  std::array<bool, kMaxTerms> used;
-  for (int side = 0; side < 2; ++side) {
-    used.fill(false);
-    double rest = 1.0 - low_sum;
-    double sum = 0.0;
-    for (int i = 0; i < n; ++i) {
-      sum += x[i].lower() * (side == 0 ? -v[i].lower() : v[i].upper());
-    }
-    for (int step = 0; step < n && rest > 0.0; ++step) {
-      int best = -1;
-      double best_value = 0.0;
-      for (int i = 0; i < n; ++i) {
-        const double value = side == 0 ? -v[i].lower() : v[i].upper();
-        if (!used[static_cast<std::size_t>(i)] && (best < 0 || value > best_value)) {
-          best = i;
-          best_value = value;
-        }
-      }
-      used[static_cast<std::size_t>(best)] = true;
-      const double take = std::min(rest, x[best].upper() - x[best].lower());
-      sum += take * best_value;
-      rest -= take;
-    }
-    result[side] = sum;
-  }
-  const double room = means::slack(v, n);
-  const double lower = -result[0] - room;
-  const double upper = result[1] + room;
-  return {lower > plain.lower() ? lower : plain.lower(), upper < plain.upper() ? upper : plain.upper()};
-}
-
 template <class S, int N>
 ceres::Jet<S, N> simplex_sum(const ceres::Jet<S, N>* x, const ceres::Jet<S, N>* v, int n) {
-  ceres::Jet<S, N> sum(S(0.0));
+  ceres::Jet<S, N> sum;
   std::array<S, kMaxTerms> fraction;
   std::array<S, kMaxTerms> value;
   for (int i = 0; i < n; ++i) {
@@ -197,6 +237,17 @@ ceres::Jet<S, N> simplex_sum(const ceres::Jet<S, N>* x, const ceres::Jet<S, N>* 
     sum.v[k] = simplex_sum(fraction.data(), slope.data(), n) + change;
   }
   return sum;
+}
+
+template <class S, int N>
+ceres::Jet<S, N> ratio_of_sums(const ceres::Jet<S, N>* x, const ceres::Jet<S, N>* u, const ceres::Jet<S, N>* s, int n) {
+  std::array<ceres::Jet<S, N>, kMaxTerms> weight;
+  std::array<ceres::Jet<S, N>, kMaxTerms> value;
+  for (int i = 0; i < n; ++i) {
+    weight[static_cast<std::size_t>(i)] = x[i] * s[i];
+    value[static_cast<std::size_t>(i)] = u[i] / s[i];
+  }
+  return weighted_mean(weight.data(), value.data(), n);
 }
 
 }  // namespace stillshed

@@ -14,8 +14,24 @@ Mixture::Mixture(std::vector<MixtureComponent> components, ActivityModel activit
   expects(!correction_ || correction_->size() == size(), "Mixture: the correction is for another number of components");
 }
 
+namespace {
+
+/// Enclosures hold for points of the simplex, so what sticks out of [0, 1] by rounding can be cut off.
 template <class S>
-Vec<S> Mixture::ln_gamma(const S& temperature_K, const Vec<S>& x) const {
+Vec<S> on_simplex(const Vec<S>& x) {
+  Vec<S> part = x;
+  for (S& fraction : part) {
+    fraction = fraction_part(fraction);
+  }
+  return part;
+}
+const Vec<double>& on_simplex(const Vec<double>& x) { return x; }
+
+}  // namespace
+
+template <class S>
+Vec<S> Mixture::ln_gamma(const S& temperature_K, const Vec<S>& given) const {
+  const auto& x = on_simplex(given);
   Vec<S> result = std::visit([&](const auto& model) { return model.ln_gamma(temperature_K, x); }, activity_);
   if (correction_) {
     const Vec<S> extra = correction_->ln_gamma(temperature_K, x);
@@ -36,8 +52,9 @@ Vec<S> Mixture::ln_k(const S& temperature_K, const Vec<S>& x, double ln_pressure
 }
 
 template <class S>
-void Mixture::ln_k_with_gradient(const S& temperature_K, const Vec<S>& x, double ln_pressure_Pa,
+void Mixture::ln_k_with_gradient(const S& temperature_K, const Vec<S>& given, double ln_pressure_Pa,
                                  LnGammaGradient<S>& out) const {
+  const auto& x = on_simplex(given);
   std::visit([&](const auto& model) { model.ln_gamma_with_gradient(temperature_K, x, out); }, activity_);
   if (correction_) {
     LnGammaGradient<S> extra;

@@ -34,7 +34,6 @@ Nrtl::Nrtl(const NrtlParameters& parameters) : p_(parameters) {
   for (int i = 0; i < n; ++i) {
     for (int j = 0; j < n; ++j) {
       depends_on_temperature_ = depends_on_temperature_ || p_.alpha_per_K(i, j) != 0.0;
-      uses_ln_T_ = uses_ln_T_ || p_.tau.e(i, j) != 0.0;
       constant_G_(i, j) = {std::exp(-p_.alpha(i, j) * p_.tau.a(i, j)),
                            exp(-(Interval(p_.alpha(i, j)) * p_.tau.a(i, j)))};
     }

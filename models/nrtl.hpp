@@ -41,36 +41,22 @@ class Nrtl {
 
   template <class S>
   [[nodiscard]] Vec<S> ln_gamma(const S& temperature_K, const Vec<S>& x) const {
-    Terms<S> t;
-    pairs(temperature_K, t);
-    means(x, t);
-    const int n = size();
-    Vec<S> result(n);
-    Vec<S> row(n);
-    for (int i = 0; i < n; ++i) {
-      for (int j = 0; j < n; ++j) {
-        row[j] = t.e(i, j);
-      }
-      result[i] = t.M[i] + simplex_sum(x.begin(), row.begin(), n);
-    }
+    const Terms<S> t(*this, temperature_K, x);
+    Vec<S> result(size());
+    values(t, x, result);
     return result;
   }
 
   template <class S>
   void ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& x, LnGammaGradient<S>& out) const {
-    Terms<S> t;
-    pairs(temperature_K, t);
-    means(x, t);
+    const Terms<S> t(*this, temperature_K, x);
     const int n = size();
     out.value = Vec<S>(n);
     out.d_dx = Matrix<S>(n);
     out.d_dT = Vec<S>(n, S(0.0));
+    values(t, x, out.value);
     Vec<S> row(n);
     for (int i = 0; i < n; ++i) {
-      for (int j = 0; j < n; ++j) {
-        row[j] = t.e(i, j);
-      }
-      out.value[i] = t.M[i] + simplex_sum(x.begin(), row.begin(), n);
       for (int k = 0; k <= i; ++k) {
         for (int j = 0; j < n; ++j) {
           row[j] = t.g(k, j) * t.e(i, j) + t.g(i, j) * t.e(k, j);
@@ -80,111 +66,118 @@ class Nrtl {
       }
     }
     if (depends_on_temperature_) {
-      temperature_slopes(temperature_K, x, t, out.d_dT);
+      temperature_slopes(t, x, out.d_dT);
     }
   }
 
  private:
+  /// What temperature and composition give; `_to` tables hold column j of the published matrix as their row j.
   template <class S>
   struct Terms {
-    Matrix<S> tau;
-    Matrix<S> G;
-    Matrix<S> g;
-    Matrix<S> e;
+    Terms(const Nrtl& model, const S& temperature_K, const Vec<S>& x)
+        : T(temperature_K),
+          tau_to(model.size()),
+          G_to(model.size()),
+          g(model.size()),
+          e(model.size()),
+          M(model.size()) {
+      model.pairs(*this);
+      model.means(x, *this);
+    }
+    S T;
+    Matrix<S> tau_to;  ///< (j, k): tau_kj
+    Matrix<S> G_to;    ///< (j, k): G_kj
+    Matrix<S> g;       ///< (i, j): G_ij / D_j
+    Matrix<S> e;       ///< (i, j)
     Vec<S> M;
   };
 
   template <class S>
-  void pairs(const S& T, Terms<S>& t) const {
+  void pairs(Terms<S>& t) const {
     using std::exp;
-    using std::log;
     const int n = size();
-    const S inverse_T = depends_on_temperature_ ? 1.0 / T : S(0.0);
-    const S ln_T = uses_ln_T_ ? log(T) : S(0.0);
-    t.tau = Matrix<S>(n);
-    t.G = Matrix<S>(n);
+    if (!depends_on_temperature_) {
+      for (int i = 0; i < n; ++i) {
+        for (int j = 0; j < n; ++j) {
+          t.tau_to(j, i) = S(p_.tau.a(i, j));
+          t.G_to(j, i) = constant<S>(constant_G_(i, j));
+        }
+      }
+      return;
+    }
+    const PairTemperature<S> shared = p_.tau.temperature(t.T);
     for (int i = 0; i < n; ++i) {
       for (int j = 0; j < n; ++j) {
         if (i == j) {
-          t.tau(i, j) = S(0.0);
-          t.G(i, j) = S(1.0);
+          t.G_to(j, i) = S(1.0);
           continue;
         }
-        if (!depends_on_temperature_) {
-          t.tau(i, j) = S(p_.tau.a(i, j));
-          t.G(i, j) = constant<S>(constant_G_(i, j));
-          continue;
-        }
-        t.tau(i, j) = p_.tau.at(i, j, T, inverse_T, ln_T);
-        if (p_.alpha_per_K(i, j) != 0.0) {
-          t.G(i, j) = exp(-(p_.alpha_per_K(i, j) * T + p_.alpha(i, j)) * t.tau(i, j));
-        } else {
-          t.G(i, j) = exp(-p_.alpha(i, j) * t.tau(i, j));
-        }
+        const S tau = p_.tau.at(i, j, shared);
+        t.tau_to(j, i) = tau;
+        t.G_to(j, i) = exp(-(alpha(i, j, t.T) * tau));
       }
     }
+  }
+
+  template <class S>
+  [[nodiscard]] S alpha(int i, int j, const S& T) const {
+    S result(p_.alpha(i, j));
+    if (p_.alpha_per_K(i, j) != 0.0) {
+      result += p_.alpha_per_K(i, j) * T;
+    }
+    return result;
   }
 
   template <class S>
   void means(const Vec<S>& x, Terms<S>& t) const {
     const int n = size();
-    t.M = Vec<S>(n);
-    t.g = Matrix<S>(n);
-    t.e = Matrix<S>(n);
     Vec<S> weight(n);
-    Vec<S> column(n);
     for (int j = 0; j < n; ++j) {
       for (int k = 0; k < n; ++k) {
-        weight[k] = x[k] * t.G(k, j);
-        column[k] = t.tau(k, j);
+        weight[k] = x[k] * t.G_to(j, k);
       }
-      t.M[j] = weighted_mean(weight.begin(), column.begin(), n);
-      for (int k = 0; k < n; ++k) {
-        column[k] = t.G(k, j);
-      }
-      const S D = simplex_sum(x.begin(), column.begin(), n);
+      t.M[j] = weighted_mean(weight.begin(), t.tau_to.row(j), n);
+      const S inverse_D = 1.0 / simplex_sum(x.begin(), t.G_to.row(j), n);
       for (int i = 0; i < n; ++i) {
-        t.g(i, j) = t.G(i, j) / D;
-        t.e(i, j) = t.g(i, j) * (t.tau(i, j) - t.M[j]);
+        t.g(i, j) = t.G_to(j, i) * inverse_D;
+        t.e(i, j) = t.g(i, j) * (t.tau_to(j, i) - t.M[j]);
       }
+    }
+  }
+
+  template <class S>
+  void values(const Terms<S>& t, const Vec<S>& x, Vec<S>& result) const {
+    for (int i = 0; i < size(); ++i) {
+      result[i] = t.M[i] + simplex_sum(x.begin(), t.e.row(i), size());
     }
   }
 
   /// d ln g_i/dT at constant x, by the chain rule over tau and G.
   template <class S>
-  void temperature_slopes(const S& T, const Vec<S>& x, const Terms<S>& t, Vec<S>& out) const {
+  void temperature_slopes(const Terms<S>& t, const Vec<S>& x, Vec<S>& out) const {
     const int n = size();
-    const S inverse_T = 1.0 / T;
-    Matrix<S> dtau(n);
-    Matrix<S> dlnG(n);
-    for (int i = 0; i < n; ++i) {
-      for (int j = 0; j < n; ++j) {
-        dtau(i, j) = i == j ? S(0.0) : p_.tau.slope(i, j, inverse_T);
-        S alpha(p_.alpha(i, j));
-        if (p_.alpha_per_K(i, j) != 0.0) {
-          alpha += p_.alpha_per_K(i, j) * T;
-        }
-        dlnG(i, j) = i == j ? S(0.0) : -(alpha * dtau(i, j)) - p_.alpha_per_K(i, j) * t.tau(i, j);
-      }
-    }
-    Vec<S> weight(n);
-    Vec<S> column(n);
+    const PairTemperature<S> shared = p_.tau.temperature(t.T);
+    Matrix<S> dtau_to(n);
+    Matrix<S> dlnG_to(n);
     Vec<S> dM(n);
     Vec<S> dlnD(n);
+    Vec<S> weight(n);
+    Vec<S> column(n);
     for (int j = 0; j < n; ++j) {
       for (int k = 0; k < n; ++k) {
-        weight[k] = x[k] * t.G(k, j);
-        column[k] = dlnG(k, j) * (t.tau(k, j) - t.M[j]) + dtau(k, j);
+        if (k != j) {
+          dtau_to(j, k) = p_.tau.slope(k, j, shared);
+          dlnG_to(j, k) = -(alpha(k, j, t.T) * dtau_to(j, k)) - p_.alpha_per_K(k, j) * t.tau_to(j, k);
+        }
+        weight[k] = x[k] * t.G_to(j, k);
+        column[k] = dlnG_to(j, k) * (t.tau_to(j, k) - t.M[j]) + dtau_to(j, k);
       }
       dM[j] = weighted_mean(weight.begin(), column.begin(), n);
-      for (int k = 0; k < n; ++k) {
-        column[k] = dlnG(k, j);
-      }
-      dlnD[j] = weighted_mean(weight.begin(), column.begin(), n);
+      dlnD[j] = weighted_mean(weight.begin(), dlnG_to.row(j), n);
     }
     for (int i = 0; i < n; ++i) {
       for (int j = 0; j < n; ++j) {
-        column[j] = t.e(i, j) * (dlnG(i, j) - dlnD[j]) + t.g(i, j) * (dtau(i, j) - dM[j]);
+        column[j] = t.e(i, j) * (dlnG_to(j, i) - dlnD[j]) + t.g(i, j) * (dtau_to(j, i) - dM[j]);
       }
       out[i] = dM[i] + simplex_sum(x.begin(), column.begin(), n);
     }
@@ -193,7 +186,6 @@ class Nrtl {
   NrtlParameters p_;
   Matrix<Enclosed> constant_G_;  ///< exp(-alpha tau), used when nothing depends on T
   bool depends_on_temperature_ = false;
-  bool uses_ln_T_ = false;
 };
 
 }  // namespace stillshed

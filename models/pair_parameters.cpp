@@ -22,6 +22,17 @@ bool PairParameters::depends_on_temperature() const {
   return false;
 }
 
+bool PairParameters::uses_ln_T() const {
+  for (int i = 0; i < size(); ++i) {
+    for (int j = 0; j < size(); ++j) {
+      if (e(i, j) != 0.0) {
+        return true;
+      }
+    }
+  }
+  return false;
+}
+
 PairParameters PairParameters::face(const Members& members) const {
   PairParameters result;
   result.a = a.face(members);

@@ -8,9 +8,18 @@
 #include <string>
 #include <vector>
 
+#include "models/interval.hpp"
+#include "models/jet_interval.hpp"
 #include "models/scalar.hpp"
 
 namespace stillshed {
+
+template <class S>
+struct PairTemperature {
+  S T;
+  S inverse_T;
+  S ln_T;  ///< zero when no entry uses it
+};
 
 struct PairParameters {
   Matrix<double> a;        ///< [-]
@@ -22,28 +31,39 @@ struct PairParameters {
   explicit PairParameters(int size) : a(size, 0.0), b_K(size, 0.0), e(size, 0.0), f_per_K(size, 0.0) {}
   [[nodiscard]] int size() const { return a.size(); }
   [[nodiscard]] bool depends_on_temperature() const;
+  [[nodiscard]] bool uses_ln_T() const;
   [[nodiscard]] PairParameters face(const Members& members) const;
   /// Bad entries: NaN, unequal sizes, a diagonal that is not zero.
   [[nodiscard]] std::vector<Problem> problems(const std::string& model) const;
 
-  /// t_ij at this temperature; `ln_T` and `inverse_T` are passed in because every entry shares them.
+  /// The functions of temperature that every entry shares.
   template <class S>
-  [[nodiscard]] S at(int i, int j, const S& temperature_K, const S& inverse_T, const S& ln_T) const {
-    S t = b_K(i, j) * inverse_T + a(i, j);
+  [[nodiscard]] PairTemperature<S> temperature(const S& temperature_K) const {
+    using std::log;
+    PairTemperature<S> t{temperature_K, 1.0 / temperature_K, S(0.0)};
+    if (uses_ln_T()) {
+      t.ln_T = log(temperature_K);
+    }
+    return t;
+  }
+  /// t_ij at this temperature.
+  template <class S>
+  [[nodiscard]] S at(int i, int j, const PairTemperature<S>& T) const {
+    S t = b_K(i, j) * T.inverse_T + a(i, j);
     if (e(i, j) != 0.0) {
-      t += e(i, j) * ln_T;
+      t += e(i, j) * T.ln_T;
     }
     if (f_per_K(i, j) != 0.0) {
-      t += f_per_K(i, j) * temperature_K;
+      t += f_per_K(i, j) * T.T;
     }
     return t;
   }
   /// dt_ij/dT.
   template <class S>
-  [[nodiscard]] S slope(int i, int j, const S& inverse_T) const {
-    S t = (-b_K(i, j)) * (inverse_T * inverse_T) + f_per_K(i, j);
+  [[nodiscard]] S slope(int i, int j, const PairTemperature<S>& T) const {
+    S t = (-b_K(i, j)) * square(T.inverse_T) + f_per_K(i, j);
     if (e(i, j) != 0.0) {
-      t += e(i, j) * inverse_T;
+      t += e(i, j) * T.inverse_T;
     }
     return t;
   }

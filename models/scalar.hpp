@@ -1,4 +1,4 @@
-/// The number types models are written over, and the small fixed-capacity vector they use.
+/// The number types models are written over, and the small fixed-capacity containers they use.
 ///
 ///   double                    speed
 ///   ceres::Jet<double, N>     exact derivatives
@@ -9,9 +9,11 @@
 /// `min`, `max` on an S; `using std::exp;` then unqualified `exp`.
 #pragma once
 
-#include <array>
+#include <cstddef>
 #include <initializer_list>
+#include <memory>
 #include <span>
+#include <type_traits>
 
 #include "params/errors.hpp"
 
@@ -20,41 +22,70 @@ namespace stillshed {
 /// Largest number of components of one mixture.
 inline constexpr int kMaxComponents = 12;
 
-/// Fixed-capacity vector of up to kMaxComponents numbers: no heap in a model call.
+/// Room for `Capacity` numbers of which only those in use are ever written: no heap, and no clearing of the rest
+/// (twelve jets of intervals are kilobytes).
+template <class S, int Capacity>
+class FixedBuffer {
+  static_assert(std::is_trivially_destructible_v<S>);
+
+ public:
+  FixedBuffer() {}  // NOLINT(modernize-use-equals-default): the union member stays unconstructed on purpose
+  explicit FixedBuffer(int count) : count_(count) { std::uninitialized_value_construct_n(data_, count); }
+  FixedBuffer(int count, const S& value) : count_(count) { std::uninitialized_fill_n(data_, count, value); }
+  FixedBuffer(const FixedBuffer& other) : count_(other.count_) {
+    std::uninitialized_copy_n(other.data_, other.count_, data_);
+  }
+  FixedBuffer& operator=(const FixedBuffer& other) {
+    if (this != &other) {
+      count_ = other.count_;
+      std::uninitialized_copy_n(other.data_, other.count_, data_);
+    }
+    return *this;
+  }
+  ~FixedBuffer() = default;
+
+  [[nodiscard]] int count() const { return count_; }
+  S* data() { return data_; }
+  const S* data() const { return data_; }
+  void append(const S& value) { std::construct_at(data_ + count_++, value); }
+
+ private:
+  union {
+    S data_[static_cast<std::size_t>(Capacity)];
+  };
+  int count_ = 0;
+};
+
+/// Fixed-capacity vector of up to kMaxComponents numbers; new entries are zero.
 template <class S>
 class Vec {
  public:
   Vec() = default;
-  explicit Vec(int size) : size_(size) { expects(size >= 0 && size <= kMaxComponents, "Vec: size out of range"); }
-  Vec(int size, const S& value) : Vec(size) {
-    for (int i = 0; i < size_; ++i) {
-      data_[static_cast<std::size_t>(i)] = value;
-    }
-  }
-  Vec(std::initializer_list<S> values) : Vec(static_cast<int>(values.size())) {
-    int i = 0;
+  explicit Vec(int size) : data_(checked(size)) {}
+  Vec(int size, const S& value) : data_(checked(size), value) {}
+  Vec(std::initializer_list<S> values) {
     for (const S& value : values) {
-      data_[static_cast<std::size_t>(i++)] = value;
+      push_back(value);
     }
   }
-  [[nodiscard]] int size() const { return size_; }
-  [[nodiscard]] bool empty() const { return size_ == 0; }
-  S& operator[](int i) { return data_[static_cast<std::size_t>(i)]; }
-  const S& operator[](int i) const { return data_[static_cast<std::size_t>(i)]; }
+  [[nodiscard]] int size() const { return data_.count(); }
+  [[nodiscard]] bool empty() const { return size() == 0; }
+  S& operator[](int i) { return data_.data()[i]; }
+  const S& operator[](int i) const { return data_.data()[i]; }
   S* begin() { return data_.data(); }
-  S* end() { return data_.data() + size_; }
+  S* end() { return data_.data() + size(); }
   const S* begin() const { return data_.data(); }
-  const S* end() const { return data_.data() + size_; }
-  [[nodiscard]] std::span<const S> span() const { return {data_.data(), static_cast<std::size_t>(size_)}; }
+  const S* end() const { return data_.data() + size(); }
+  [[nodiscard]] std::span<const S> span() const { return {begin(), static_cast<std::size_t>(size())}; }
   void push_back(const S& value) {
-    expects(size_ < kMaxComponents, "Vec: full");
-    data_[static_cast<std::size_t>(size_++)] = value;
+    expects(size() < kMaxComponents, "Vec: full");
+    data_.append(value);
   }
   friend bool operator==(const Vec& a, const Vec& b) {
-    if (a.size_ != b.size_) {
+    if (a.size() != b.size()) {
       return false;
     }
-    for (int i = 0; i < a.size_; ++i) {
+    for (int i = 0; i < a.size(); ++i) {
       if (!(a[i] == b[i])) {
         return false;
       }
@@ -63,29 +94,33 @@ class Vec {
   }
 
  private:
-  std::array<S, kMaxComponents> data_;  // not cleared: a model call fills what it uses
-  int size_ = 0;
+  static int checked(int size) {
+    expects(size >= 0 && size <= kMaxComponents, "Vec: size out of range");
+    return size;
+  }
+  FixedBuffer<S, kMaxComponents> data_;
 };
 
-/// Square matrix of up to kMaxComponents rows; row i belongs to component i.
+/// Mole fractions in the order of the mixture's components.
+using Composition = Vec<double>;
+
+/// Indices of the components that make up a face of the composition simplex, ascending.
+using Members = Vec<int>;
+
+/// Square matrix of up to kMaxComponents rows, stored row by row; row i belongs to component i; new entries are zero.
 template <class S>
 class Matrix {
  public:
   Matrix() = default;
-  explicit Matrix(int size) : size_(size) { expects(size >= 0 && size <= kMaxComponents, "Matrix: size out of range"); }
-  Matrix(int size, const S& value) : Matrix(size) {
-    for (int i = 0; i < size; ++i) {
-      for (int j = 0; j < size; ++j) {
-        (*this)(i, j) = value;
-      }
-    }
-  }
+  explicit Matrix(int size) : data_(checked(size) * size), size_(size) {}
+  Matrix(int size, const S& value) : data_(checked(size) * size, value), size_(size) {}
   [[nodiscard]] int size() const { return size_; }
-  S& operator()(int i, int j) { return data_[static_cast<std::size_t>(i * kMaxComponents + j)]; }
-  const S& operator()(int i, int j) const { return data_[static_cast<std::size_t>(i * kMaxComponents + j)]; }
+  S& operator()(int i, int j) { return data_.data()[i * size_ + j]; }
+  const S& operator()(int i, int j) const { return data_.data()[i * size_ + j]; }
+  S* row(int i) { return data_.data() + i * size_; }
+  const S* row(int i) const { return data_.data() + i * size_; }
   /// Rows and columns of some of the components.
-  template <class Indices>
-  [[nodiscard]] Matrix face(const Indices& members) const {
+  [[nodiscard]] Matrix face(const Members& members) const {
     Matrix result(members.size());
     for (int i = 0; i < members.size(); ++i) {
       for (int j = 0; j < members.size(); ++j) {
@@ -96,14 +131,12 @@ class Matrix {
   }
 
  private:
-  std::array<S, static_cast<std::size_t>(kMaxComponents) * kMaxComponents> data_;
+  static int checked(int size) {
+    expects(size >= 0 && size <= kMaxComponents, "Matrix: size out of range");
+    return size;
+  }
+  FixedBuffer<S, kMaxComponents * kMaxComponents> data_;
   int size_ = 0;
 };
-
-/// Mole fractions in the order of the mixture's components.
-using Composition = Vec<double>;
-
-/// Indices of the components that make up a face of the composition simplex, ascending.
-using Members = Vec<int>;
 
 }  // namespace stillshed

@@ -51,9 +51,7 @@ class Unifac {
   }
   template <class S>
   [[nodiscard]] Vec<S> residual(const S& temperature_K, const Vec<S>& x) const {
-    SitePsi<S> psi;
-    fill(temperature_K, false, psi);
-    return core_.residual(psi, x);
+    return core_.residual(site_psi(temperature_K, false), x);
   }
   template <class S>
   [[nodiscard]] Vec<S> ln_gamma(const S& temperature_K, const Vec<S>& x) const {
@@ -66,38 +64,33 @@ class Unifac {
   }
   template <class S>
   void ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& x, LnGammaGradient<S>& out) const {
-    SitePsi<S> psi;
-    fill(temperature_K, true, psi);
-    core_.ln_gamma_with_gradient(psi, x, true, out);
+    core_.ln_gamma_with_gradient(site_psi(temperature_K, true), x, out);
   }
 
  private:
   template <class S>
-  void fill(const S& T, bool slopes, SitePsi<S>& psi) const {
+  [[nodiscard]] SitePsi<S> site_psi(const S& T, bool with_slopes) const {
     using std::exp;
+    SitePsi<S> result(core_.sites(), with_slopes);
     const S inverse_T = 1.0 / T;
-    for (int i = 0; i < core_.sites(); ++i) {
-      for (int j = 0; j < core_.sites(); ++j) {
-        const auto m = static_cast<std::size_t>(i);
-        const auto k = static_cast<std::size_t>(j);
-        const GroupInteraction& p = interaction_[m][k];
-        if (i == j) {
-          psi.psi[m][k] = S(1.0);
-          if (slopes) {
-            psi.ln_slope[m][k] = S(0.0);
-          }
+    for (int m = 0; m < core_.sites(); ++m) {
+      for (int k = 0; k < core_.sites(); ++k) {
+        if (m == k) {
+          result.psi(m, k) = S(1.0);
           continue;
         }
+        const GroupInteraction& p = interaction_[static_cast<std::size_t>(m)][static_cast<std::size_t>(k)];
         S exponent = p.a_K * inverse_T + p.b;
         if (p.c_per_K != 0.0) {
           exponent += p.c_per_K * T;
         }
-        psi.psi[m][k] = exp(-exponent);
-        if (slopes) {
-          psi.ln_slope[m][k] = p.a_K * (inverse_T * inverse_T) - p.c_per_K;
+        result.psi(m, k) = exp(-exponent);
+        if (with_slopes) {
+          result.ln_slope(m, k) = p.a_K * square(inverse_T) - p.c_per_K;
         }
       }
     }
+    return result;
   }
 
   GroupModel model_ = GroupModel::unifac;

@@ -37,9 +37,7 @@ class Uniquac {
   }
   template <class S>
   [[nodiscard]] Vec<S> residual(const S& temperature_K, const Vec<S>& x) const {
-    SitePsi<S> psi;
-    fill(temperature_K, false, psi);
-    return core_.residual(psi, x);
+    return core_.residual(site_psi(temperature_K, false), x);
   }
   template <class S>
   [[nodiscard]] Vec<S> ln_gamma(const S& temperature_K, const Vec<S>& x) const {
@@ -52,28 +50,24 @@ class Uniquac {
   }
   template <class S>
   void ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& x, LnGammaGradient<S>& out) const {
-    SitePsi<S> psi;
-    fill(temperature_K, depends_on_temperature(), psi);
-    core_.ln_gamma_with_gradient(psi, x, depends_on_temperature(), out);
+    core_.ln_gamma_with_gradient(site_psi(temperature_K, depends_on_temperature()), x, out);
   }
 
  private:
   template <class S>
-  void fill(const S& T, bool slopes, SitePsi<S>& psi) const {
+  [[nodiscard]] SitePsi<S> site_psi(const S& T, bool with_slopes) const {
     using std::exp;
-    using std::log;
-    const S inverse_T = 1.0 / T;
-    const S ln_T = log(T);
+    SitePsi<S> result(size(), with_slopes);
+    const PairTemperature<S> t = p_.ln_tau.temperature(T);
     for (int i = 0; i < size(); ++i) {
       for (int j = 0; j < size(); ++j) {
-        const auto m = static_cast<std::size_t>(i);
-        const auto k = static_cast<std::size_t>(j);
-        psi.psi[m][k] = i == j ? S(1.0) : exp(p_.ln_tau.at(i, j, T, inverse_T, ln_T));
-        if (slopes) {
-          psi.ln_slope[m][k] = i == j ? S(0.0) : p_.ln_tau.slope(i, j, inverse_T);
+        result.psi(i, j) = i == j ? S(1.0) : exp(p_.ln_tau.at(i, j, t));
+        if (with_slopes) {
+          result.ln_slope(i, j) = i == j ? S(0.0) : p_.ln_tau.slope(i, j, t);
         }
       }
     }
+    return result;
   }
 
   UniquacParameters p_;

@@ -84,14 +84,12 @@ class Wilson {
   template <class S>
   void factors(const S& T, const Vec<S>& x, Matrix<S>& L, Vec<S>& D) const {
     using std::exp;
-    using std::log;
     const int n = size();
-    const S inverse_T = 1.0 / T;
-    const S ln_T = log(T);
+    const PairTemperature<S> shared = p_.temperature(T);
     Vec<S> row(n);
     for (int i = 0; i < n; ++i) {
       for (int j = 0; j < n; ++j) {
-        L(i, j) = i == j ? S(1.0) : exp(p_.at(i, j, T, inverse_T, ln_T));
+        L(i, j) = i == j ? S(1.0) : exp(p_.at(i, j, shared));
         row[j] = L(i, j);
       }
       D[i] = simplex_sum(x.begin(), row.begin(), n);
@@ -101,20 +99,20 @@ class Wilson {
   template <class S>
   void temperature_slopes(const S& T, const Vec<S>& x, const Matrix<S>& L, const Matrix<S>& l, Vec<S>& out) const {
     const int n = size();
-    const S inverse_T = 1.0 / T;
+    const PairTemperature<S> shared = p_.temperature(T);
     Vec<S> weight(n);
     Vec<S> column(n);
     Vec<S> dlnD(n);
     for (int i = 0; i < n; ++i) {
       for (int j = 0; j < n; ++j) {
         weight[j] = x[j] * L(i, j);
-        column[j] = i == j ? S(0.0) : p_.slope(i, j, inverse_T);
+        column[j] = i == j ? S(0.0) : p_.slope(i, j, shared);
       }
       dlnD[i] = weighted_mean(weight.begin(), column.begin(), n);
     }
     for (int i = 0; i < n; ++i) {
       for (int k = 0; k < n; ++k) {
-        const S slope = i == k ? S(0.0) : p_.slope(k, i, inverse_T);
+        const S slope = i == k ? S(0.0) : p_.slope(k, i, shared);
         column[k] = l(k, i) * (slope - dlnD[k]);
       }
       out[i] = -dlnD[i] - simplex_sum(x.begin(), column.begin(), n);
