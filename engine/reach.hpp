@@ -21,9 +21,9 @@ enum class Basis { mole, mass };
 struct ProductTest {
   enum class What { purity, impurity, recovery };
   What what = What::purity;
-  int component = 0;      ///< for an impurity: which one; otherwise the product
-  bool at_least = true;   ///< >= (true) or <= (false)
-  double value = 0.995;   ///< fraction
+  int component = 0;     ///< for an impurity: which one; otherwise the product
+  bool at_least = true;  ///< >= (true) or <= (false)
+  double value = 0.995;  ///< fraction
   Basis basis = Basis::mass;
 };
 
@@ -37,14 +37,14 @@ struct ProductSpec {
 struct Cut {
   Composition start;
   Composition end;
-  Composition average;                 ///< what the receiver holds
-  std::optional<int> fixed_point;      ///< index into Chart::fixed_points
-  double share = 0.0;                  ///< moles per mole of charge
+  Composition average;             ///< what the receiver holds
+  std::optional<int> fixed_point;  ///< index into Chart::fixed_points
+  double share = 0.0;              ///< moles per mole of charge
   double t_start_K = 0.0;
   double t_end_K = 0.0;
   Composition pot_start;
   Composition pot_end;
-  std::string on;                      ///< "interior", "face" or the id of a boundary
+  std::string on;  ///< "interior", "face" or the id of a boundary
 };
 
 struct Batch {
@@ -52,8 +52,8 @@ struct Batch {
   Mode mode = Mode::rectifier;
   Status status = Status::not_run;
   std::string message;
-  std::vector<Cut> cuts;   ///< in the order they leave; the heel is the last piece when the pot cannot change any more
-  double heel_share = 0.0; ///< what stays (zero when the last cut empties the pot)
+  std::vector<Cut> cuts;    ///< in the order they leave; the heel is the last piece when the pot cannot change any more
+  double heel_share = 0.0;  ///< what stays (zero when the last cut empties the pot)
   Composition heel;
 };
 
@@ -63,11 +63,11 @@ struct Column {
   Composition distillate;
   Composition bottoms;
   double distillate_to_feed = 0.0;
-  double feed_to_charge = 1.0;         ///< moles of this column's feed per mole of the original feed
-  bool direct = true;                  ///< direct: the distillate is the sharp end; indirect: the bottoms
-  std::vector<Composition> witness;    ///< one residue curve from distillate to bottoms
-  std::optional<int> parent;           ///< index of the column whose stream feeds this one
-  bool parent_distillate = false;      ///< which of its streams
+  double feed_to_charge = 1.0;       ///< moles of this column's feed per mole of the original feed
+  bool direct = true;                ///< direct: the distillate is the sharp end; indirect: the bottoms
+  std::vector<Composition> witness;  ///< one residue curve from distillate to bottoms
+  std::optional<int> parent;         ///< index of the column whose stream feeds this one
+  bool parent_distillate = false;    ///< which of its streams
 };
 
 struct Sequence {
@@ -87,8 +87,8 @@ enum class Verdict { open, tight, capped, shut, no_call };
 
 struct TestOutcome {
   ProductTest test;
-  double limit = 0.0;    ///< best value reached in the chosen reading
-  double margin = 0.0;   ///< in the sense of the test: positive = inside
+  double limit = 0.0;   ///< best value reached in the chosen reading
+  double margin = 0.0;  ///< in the sense of the test: positive = inside
   bool pass = false;
 };
 
@@ -99,17 +99,17 @@ struct ProductOutcome {
   std::string reading;             ///< "batch[0].cuts[1]" or "sequences[2].streams[0]"; empty: none
   double purity_limit_mole = 0.0;  ///< supremum over (a) and (b)
   double purity_limit_mass = 0.0;
-  double recovery = 0.0;           ///< largest recovery in one receiver that meets the tests (at the limit when capped)
-  std::string limited_by;          ///< fixed point or boundary id
+  double recovery = 0.0;   ///< largest recovery in one receiver that meets the tests (at the limit when capped)
+  std::string limited_by;  ///< fixed point or boundary id
   std::vector<Reason> reasons;
-  std::string sentence;            ///< what stops it, in one sentence, built from the numbers above
+  std::string sentence;                    ///< what stops it, in one sentence, built from the numbers above
   std::optional<double> pocket_width;      ///< width of the pocket finite reflux may gain, mole fraction
   std::optional<double> purity_at_stages;  ///< (c), mole fraction, when a number of stages was given
 };
 
 struct ReachOptions {
-  std::optional<int> stages;            ///< theoretical stages, pot included
-  double room = 0.2;                    ///< of the impurity allowance
+  std::optional<int> stages;  ///< theoretical stages, pot included
+  double room = 0.2;          ///< of the impurity allowance
   double required_recovery = 0.5;
   int max_depth = 5;
 };
@@ -118,7 +118,7 @@ struct Reach {
   Status status = Status::not_run;
   std::string message;
   Position feed;
-  std::vector<Batch> batch;             ///< rectifier, stripper
+  std::vector<Batch> batch;  ///< rectifier, stripper
   std::vector<Sequence> sequences;
   std::vector<Composition> stage_profile;  ///< (c) from the pot upward, when stages were given
   std::vector<ProductOutcome> products;

@@ -31,9 +31,9 @@ enum class Stability { stable, unstable, not_concluded };
 /// Result of the tangent-plane test of one liquid (engine/stability.hpp).
 struct StabilityResult {
   Stability outcome = Stability::not_concluded;
-  bool proved = false;      ///< true: interval search covered the simplex; false: multi-start search only
-  double tpd_min = 0.0;     ///< smallest tangent-plane distance found, in RT; the trivial solution counts as 0
-  Composition incipient;    ///< composition of that minimum
+  bool proved = false;    ///< true: interval search covered the simplex; false: multi-start search only
+  double tpd_min = 0.0;   ///< smallest tangent-plane distance found, in RT; the trivial solution counts as 0
+  Composition incipient;  ///< composition of that minimum
 };
 
 /// An axis-parallel box in mole fractions and temperature.
@@ -46,12 +46,13 @@ struct Box {
 
 /// A point where the residue-curve field vanishes: a pure component or an azeotrope.
 struct FixedPoint {
-  std::string id;     ///< "acetone" or "az1(acetone,methanol)"
-  Members members;    ///< indices of the present components
-  Composition x;      ///< all components of the mixture; zero for absent ones
+  std::string id;   ///< "acetone" or "az1(acetone,methanol)"
+  Members members;  ///< indices of the present components
+  Composition x;    ///< all components of the mixture; zero for absent ones
   double temperature_K = 0.0;
   NodeType node = NodeType::degenerate;  ///< in the whole mixture
-  std::vector<double> eigenvalues;       ///< of d(x - y)/dx on the simplex: members.size()-1 inside the face, then 1 - K_k for each absent k
+  std::vector<double>
+      eigenvalues;  ///< of d(x - y)/dx on the simplex: members.size()-1 inside the face, then 1 - K_k for each absent k
   bool pure() const { return members.size() == 1; }
 };
 
@@ -79,29 +80,30 @@ struct FaceProof {
   double t_upper_K = 0.0;
   std::int64_t boxes = 0;
   std::vector<Box> undecided;
-  std::optional<int> index_sum;      ///< empty where the rule cannot be evaluated
+  std::optional<int> index_sum;  ///< empty where the rule cannot be evaluated
   int index_expected = 0;
-  std::optional<bool> index_holds;   ///< empty: not evaluated
-  std::string note;                  ///< why not evaluated, e.g. "phase-split"
+  std::optional<bool> index_holds;  ///< empty: not evaluated
+  std::string note;                 ///< why not evaluated, e.g. "phase-split"
 };
 
 struct SurveyOptions {
-  int prove_up_to = 5;                  ///< faces with at most this many members are proved
-  std::int64_t max_boxes = 2'000'000;   ///< budget of one face
-  double min_relative_width = 1e-12;    ///< a box narrower than this (relative to its distance from the faces) is a cluster
-  int stability_proof_up_to = 3;        ///< members; larger ones are searched only
+  int prove_up_to = 5;                 ///< faces with at most this many members are proved
+  std::int64_t max_boxes = 2'000'000;  ///< budget of one face
+  double min_relative_width =
+      1e-12;                      ///< a box narrower than this (relative to its distance from the faces) is a cluster
+  int stability_proof_up_to = 3;  ///< members; larger ones are searched only
   std::uint64_t seed = 1;
   std::stop_token stop;
   ProgressFn progress;
-  Executor executor;                    ///< empty: serial
+  Executor executor;                                        ///< empty: serial
   [[nodiscard]] std::vector<std::string> problems() const;  ///< empty when usable
 };
 
 struct Survey {
   Status status = Status::not_run;
   double pressure_Pa = 0.0;
-  std::vector<FixedPoint> pure;          ///< one per component, component order
-  std::vector<Azeotrope> azeotropes;     ///< by temperature, then composition
+  std::vector<FixedPoint> pure;       ///< one per component, component order
+  std::vector<Azeotrope> azeotropes;  ///< by temperature, then composition
   std::vector<RejectedRoot> rejected;
   std::vector<FaceProof> faces;          ///< by size, then members
   std::optional<bool> index_rule_holds;  ///< of the whole mixture; empty when undefined
