@@ -52,8 +52,7 @@ Vec<S> Mixture::ln_k(const S& temperature_K, const Vec<S>& x, double ln_pressure
 }
 
 template <class S>
-void Mixture::ln_k_with_gradient(const S& temperature_K, const Vec<S>& given, double ln_pressure_Pa,
-                                 LnGammaGradient<S>& out) const {
+void Mixture::ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& given, LnGammaGradient<S>& out) const {
   const auto& x = on_simplex(given);
   std::visit([&](const auto& model) { model.ln_gamma_with_gradient(temperature_K, x, out); }, activity_);
   if (correction_) {
@@ -66,6 +65,12 @@ void Mixture::ln_k_with_gradient(const S& temperature_K, const Vec<S>& given, do
       }
     }
   }
+}
+
+template <class S>
+void Mixture::ln_k_with_gradient(const S& temperature_K, const Vec<S>& x, double ln_pressure_Pa,
+                                 LnGammaGradient<S>& out) const {
+  ln_gamma_with_gradient(temperature_K, x, out);
   for (int i = 0; i < size(); ++i) {
     out.value[i] += ln_psat(i, temperature_K) - S(ln_pressure_Pa);
     out.d_dT[i] += component(i).pressure.d_ln_psat_dT(temperature_K);
@@ -129,6 +134,9 @@ STILLSHED_INSTANTIATE(Interval);
 STILLSHED_INSTANTIATE(Jet4);
 STILLSHED_INSTANTIATE(IntervalJet4);
 #undef STILLSHED_INSTANTIATE
+template void Mixture::ln_gamma_with_gradient<double>(const double&, const Vec<double>&, LnGammaGradient<double>&) const;
+template void Mixture::ln_gamma_with_gradient<Interval>(const Interval&, const Vec<Interval>&,
+                                                        LnGammaGradient<Interval>&) const;
 template void Mixture::ln_k_with_gradient<double>(const double&, const Vec<double>&, double,
                                                   LnGammaGradient<double>&) const;
 template void Mixture::ln_k_with_gradient<Interval>(const Interval&, const Vec<Interval>&, double,

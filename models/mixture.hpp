@@ -56,6 +56,11 @@ class Mixture {
   template <class S>
   [[nodiscard]] Vec<S> ln_k(const S& temperature_K, const Vec<S>& x, double ln_pressure_Pa) const;
 
+  /// ln gamma of all components with its analytic gradient (the x as independent numbers, see models/gradient.hpp).
+  /// S = double or Interval.
+  template <class S>
+  void ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& x, LnGammaGradient<S>& out) const;
+
   /// ln K of all components with its analytic gradient (the x as independent numbers, see models/gradient.hpp).
   /// S = double or Interval.
   template <class S>

@@ -1,0 +1,409 @@
+#include "engine/stability.hpp"
+
+#include <Eigen/Cholesky>
+#include <Eigen/Eigenvalues>
+#include <algorithm>
+#include <cmath>
+#include <optional>
+#include <random>
+
+#include "engine/stability_proof.hpp"
+
+namespace stillshed {
+namespace {
+
+using SmallMatrix = Eigen::Matrix<double, Eigen::Dynamic, Eigen::Dynamic, 0, kMaxComponents, kMaxComponents>;
+using SmallVector = Eigen::Matrix<double, Eigen::Dynamic, 1, 0, kMaxComponents, 1>;
+
+constexpr int kSubstitutions = 3;  // enough to bring very dilute components to their place
+constexpr int kMaxIterations = 120;
+constexpr double kStationary = 1e-11;  // size of the gradient in 2 sqrt(W)
+constexpr double kSamePlace = 1e-5;    // a stationary point this close to x is x itself
+constexpr double kLargestExponent = 60.0;
+
+Composition normalised(const Composition& x) {
+  Composition result = x;
+  double sum = 0.0;
+  for (const double value : x) {
+    sum += value;
+  }
+  for (double& value : result) {
+    value /= sum;
+  }
+  return result;
+}
+
+/// The reference liquid within its face: no component is absent.
+struct Reference {
+  Composition x;
+  Vec<double> d;  ///< ln x_i + ln g_i(x)
+};
+
+/// End of one descent.
+struct Descent {
+  bool converged = false;
+  double tpd = 0.0;
+  Composition w;
+};
+
+/// Descends Michelsen's unnormalised form of tpd,
+///   tm(W) = 1 + sum_i W_i (s_i - 1),  s_i = ln W_i + ln g_i(W/sum W) - d_i,
+/// whose stationary points have s_i = 0 and tpd = -ln sum W.
+class TangentPlaneDescent {
+ public:
+  TangentPlaneDescent(const Mixture& face, double temperature_K, const Reference& reference)
+      : face_(face), temperature_K_(temperature_K), d_(reference.d) {}
+
+  [[nodiscard]] Descent run(const Composition& start) const {
+    Composition W = start;
+    for (int k = 0; k < kSubstitutions; ++k) {
+      W = substitute(W);
+    }
+    Model here = evaluate(W);
+    double shift = 0.0;
+    Descent result;
+    for (int iteration = 0; iteration < kMaxIterations; ++iteration) {
+      if (!std::isfinite(here.tm)) {
+        break;
+      }
+      if (here.gradient.cwiseAbs().maxCoeff() < kStationary) {
+        result.converged = true;
+        break;
+      }
+      if (!step(W, here, shift)) {
+        // No descent left: a minimum within rounding, or a failure if the gradient is still large.
+        result.converged = here.gradient.cwiseAbs().maxCoeff() < 1e-7;
+        break;
+      }
+    }
+    result.w = normalised(W);
+    result.tpd = distance(result.w);
+    return result;
+  }
+
+  [[nodiscard]] double distance(const Composition& w) const {
+    const Vec<double> ln_gamma = face_.ln_gamma(temperature_K_, w);
+    double sum = 0.0;
+    for (int i = 0; i < w.size(); ++i) {
+      sum += w[i] > 0.0 ? w[i] * (std::log(w[i]) + ln_gamma[i] - d_[i]) : 0.0;
+    }
+    return sum;
+  }
+
+ private:
+  struct Model {
+    double tm = 0.0;
+    SmallVector gradient;
+    SmallMatrix hessian;
+  };
+
+  /// W_i = exp(d_i - ln g_i(w)): the fixed-point form of s_i = 0. Zeros in `from` are allowed.
+  [[nodiscard]] Composition substitute(const Composition& from) const {
+    const Vec<double> ln_gamma = face_.ln_gamma(temperature_K_, normalised(from));
+    Composition W(from.size());
+    for (int i = 0; i < from.size(); ++i) {
+      W[i] = std::exp(std::clamp(d_[i] - ln_gamma[i], -kLargestExponent, kLargestExponent));
+    }
+    return W;
+  }
+
+  [[nodiscard]] Model evaluate(const Composition& W) const {
+    const int n = W.size();
+    const Composition w = normalised(W);
+    LnGammaGradient<double> model;
+    face_.ln_gamma_with_gradient(temperature_K_, w, model);
+    double total = 0.0;
+    for (const double value : W) {
+      total += value;
+    }
+    Model out;
+    out.tm = 1.0;
+    out.gradient.resize(n);
+    out.hessian.resize(n, n);
+    for (int i = 0; i < n; ++i) {
+      const double s = std::log(W[i]) + model.value[i] - d_[i];
+      out.tm += W[i] * (s - 1.0);
+      out.gradient(i) = std::sqrt(W[i]) * s;
+      double mean = 0.0;
+      for (int j = 0; j < n; ++j) {
+        mean += w[j] * model.d_dx(i, j);
+      }
+      for (int j = 0; j < n; ++j) {
+        out.hessian(i, j) = std::sqrt(W[i] * W[j]) * (model.d_dx(i, j) - mean) / total;
+      }
+      out.hessian(i, i) += 1.0 + 0.5 * s;
+    }
+    return out;
+  }
+
+  /// One Newton step with as much shift of the curvature as descent needs. False: no step lowers tm.
+  bool step(Composition& W, Model& here, double& shift) const {
+    const int n = W.size();
+    for (int attempt = 0; attempt < 40; ++attempt) {
+      SmallMatrix shifted = here.hessian;
+      shifted.diagonal().array() += shift;
+      const Eigen::LLT<SmallMatrix> factor(shifted);
+      if (factor.info() == Eigen::Success) {
+        const SmallVector change = factor.solve(here.gradient);
+        Composition trial(n);
+        for (int i = 0; i < n; ++i) {
+          const double root = std::sqrt(W[i]);
+          // Never through zero, where the form has a false stationary point.
+          const double moved = std::clamp(root - 0.5 * change(i), 0.2 * root, 3.0 * root + 0.1);
+          trial[i] = moved * moved;
+        }
+        Model there = evaluate(trial);
+        if (there.tm <= here.tm + 1e-15 * std::abs(here.tm) && trial != W) {
+          const bool better = there.tm < here.tm || there.gradient.norm() < here.gradient.norm();
+          if (better) {
+            W = trial;
+            here = there;
+            shift = shift > 1e-3 ? 0.1 * shift : 0.0;
+            return true;
+          }
+        }
+      }
+      shift = std::max(4.0 * shift, 1e-2);
+    }
+    return false;
+  }
+
+  const Mixture& face_;
+  double temperature_K_ = 0.0;
+  const Vec<double>& d_;
+};
+
+Softness softest_in_face(const Mixture& face, double temperature_K, const Composition& x) {
+  const int n = x.size();
+  LnGammaGradient<double> model;
+  face.ln_gamma_with_gradient(temperature_K, x, model);
+  SmallMatrix curvature(n, n);
+  SmallVector root(n);
+  for (int i = 0; i < n; ++i) {
+    root(i) = std::sqrt(x[i]);
+  }
+  for (int i = 0; i < n; ++i) {
+    for (int j = 0; j < n; ++j) {
+      curvature(i, j) = root(i) * root(j) * 0.5 * (model.d_dx(i, j) + model.d_dx(j, i));
+    }
+    curvature(i, i) += 1.0;
+  }
+  // Along sqrt(x) nothing but the amount of liquid changes: give that direction more curvature than any other.
+  const SmallMatrix amount = root * root.transpose() / root.squaredNorm();
+  const SmallMatrix outside = SmallMatrix::Identity(n, n) - amount;
+  const SmallMatrix projected = outside * curvature * outside + 2.0 * curvature.norm() * amount;
+  const Eigen::SelfAdjointEigenSolver<SmallMatrix> solver(projected);
+  Softness result;
+  result.curvature = solver.eigenvalues()(0);
+  result.direction = Composition(n);
+  double sum = 0.0;
+  for (int i = 0; i < n; ++i) {
+    result.direction[i] = root(i) * solver.eigenvectors()(i, 0);
+    sum += result.direction[i];
+  }
+  for (int i = 0; i < n; ++i) {
+    result.direction[i] -= sum * x[i];
+  }
+  return result;
+}
+
+/// x moved along `direction` by `share` of the way to the boundary of the simplex.
+Composition moved(const Composition& x, const Composition& direction, double sign, double share) {
+  double room = 1e300;
+  for (int i = 0; i < x.size(); ++i) {
+    const double rate = sign * direction[i];
+    if (rate < 0.0) {
+      room = std::min(room, -x[i] / rate);
+    }
+  }
+  Composition result = x;
+  for (int i = 0; i < x.size(); ++i) {
+    result[i] = std::max(0.0, x[i] + share * room * sign * direction[i]);
+  }
+  return normalised(result);
+}
+
+std::vector<Composition> starting_points(const Reference& reference, const Softness& softness,
+                                         const StabilityOptions& options, const Members& members) {
+  const int n = reference.x.size();
+  std::vector<Composition> starts;
+  for (int k = 0; k < n; ++k) {
+    Composition pure(n, 0.0);
+    pure[k] = 1.0;
+    starts.push_back(pure);
+  }
+  for (int a = 0; a < n; ++a) {
+    for (int b = a + 1; b < n; ++b) {
+      Composition middle(n, 0.0);
+      middle[a] = 0.5;
+      middle[b] = 0.5;
+      starts.push_back(middle);
+    }
+  }
+  starts.push_back(Composition(n, 1.0 / n));
+  for (const double share : {0.02, 0.5, 0.95}) {
+    starts.push_back(moved(reference.x, softness.direction, 1.0, share));
+    starts.push_back(moved(reference.x, softness.direction, -1.0, share));
+  }
+  Composition ideal(n);
+  for (int i = 0; i < n; ++i) {
+    ideal[i] = std::exp(std::clamp(reference.d[i], -kLargestExponent, kLargestExponent));
+  }
+  starts.push_back(normalised(ideal));
+  for (const Composition& given : options.starts) {
+    expects(given.size() >= n, "stability: a starting point has the wrong size");
+    Composition start(n);
+    for (int a = 0; a < n; ++a) {
+      start[a] = given[members[a]];
+    }
+    starts.push_back(normalised(start));
+  }
+  std::mt19937_64 random(options.seed);
+  const int seeded = n <= 3 ? 3 : 4 * n;
+  for (int k = 0; k < seeded; ++k) {
+    Composition start(n);
+    for (double& value : start) {
+      // Cubed exponentials: points near faces and edges as often as in the middle.
+      const double u = (static_cast<double>(random() >> 11) + 0.5) * 0x1.0p-53;
+      value = -std::log(u) * std::log(u) * std::log(u);
+    }
+    starts.push_back(normalised(start));
+  }
+  return starts;
+}
+
+struct SearchResult {
+  double tpd = 0.0;
+  Composition w;           ///< of the lowest tpd; x when that is the trivial solution
+  bool conclusive = true;  ///< every start converged, none to a tpd too close to zero away from x
+};
+
+SearchResult search(const Mixture& face, double temperature_K, const Reference& reference,
+                    const std::vector<Composition>& starts) {
+  const TangentPlaneDescent descent(face, temperature_K, reference);
+  SearchResult best;
+  best.w = reference.x;
+  for (const Composition& start : starts) {
+    const Descent end = descent.run(start);
+    double distance = 0.0;
+    for (int i = 0; i < end.w.size(); ++i) {
+      distance = std::max(distance, std::abs(end.w[i] - reference.x[i]));
+    }
+    // Negated comparisons also catch NaN.
+    const bool trivial = !(distance > kSamePlace) && !(std::abs(end.tpd) > kTpdNoise);
+    best.conclusive = best.conclusive && end.converged && (trivial || std::abs(end.tpd) > kTpdNoise);
+    if (!trivial && end.tpd < best.tpd) {
+      best.tpd = end.tpd;
+      best.w = end.w;
+    }
+  }
+  return best;
+}
+
+Members present(const Composition& x) {
+  Members members;
+  for (int i = 0; i < x.size(); ++i) {
+    expects(x[i] >= 0.0, "stability: negative mole fraction");
+    if (x[i] > 0.0) {
+      members.push_back(i);
+    }
+  }
+  return members;
+}
+
+Composition in_face(const Composition& x, const Members& members) {
+  Composition result(members.size());
+  for (int a = 0; a < members.size(); ++a) {
+    result[a] = x[members[a]];
+  }
+  return result;
+}
+
+Composition in_mixture(const Composition& x, const Members& members, int size) {
+  Composition result(size, 0.0);
+  for (int a = 0; a < members.size(); ++a) {
+    result[members[a]] = x[a];
+  }
+  return result;
+}
+
+StabilityResult conclude(const Mixture& face, double temperature_K, const Reference& reference,
+                         const Softness& softness, const SearchResult& found, const StabilityOptions& options) {
+  StabilityResult result;
+  result.tpd_min = found.tpd;
+  result.incipient = found.w;
+  if (found.tpd < -kTpdNoise) {
+    result.proved = proves_unstable(face, temperature_K, reference.x, found.w);
+    result.outcome = result.proved ? Stability::unstable : Stability::not_concluded;
+    return result;
+  }
+  if (reference.x.size() <= std::min(options.proof_up_to, kMostProvedComponents)) {
+    result.proved = prove_stable(face, temperature_K, reference.x, options.max_boxes).proved;
+  }
+  const bool searched = found.conclusive && softness.curvature > kSoftCurvature;
+  result.outcome = result.proved || searched ? Stability::stable : Stability::not_concluded;
+  if (result.proved) {  // what lies within rounding of zero is zero
+    result.tpd_min = 0.0;
+    result.incipient = reference.x;
+  }
+  return result;
+}
+
+}  // namespace
+
+StabilityResult test_stability(const Mixture& mixture, double temperature_K, const Composition& x,
+                               const StabilityOptions& options) {
+  expects(x.size() == mixture.size(), "stability: composition and mixture differ in size");
+  const Members members = present(x);
+  expects(!members.empty(), "stability: empty liquid");
+  if (members.size() == 1) {
+    return {Stability::stable, true, 0.0, x};
+  }
+  const bool whole = members.size() == mixture.size();
+  std::optional<Mixture> part;
+  if (!whole) {
+    part = mixture.face(members);
+  }
+  const Mixture& face = whole ? mixture : *part;
+  Reference reference;
+  reference.x = normalised(in_face(x, members));
+  reference.d = face.ln_gamma(temperature_K, reference.x);
+  for (int a = 0; a < members.size(); ++a) {
+    reference.d[a] += std::log(reference.x[a]);
+  }
+  const Softness softness = softest_in_face(face, temperature_K, reference.x);
+  const std::vector<Composition> starts = starting_points(reference, softness, options, members);
+  const SearchResult found = search(face, temperature_K, reference, starts);
+  StabilityResult result = conclude(face, temperature_K, reference, softness, found, options);
+  result.incipient = in_mixture(result.incipient, members, mixture.size());
+  return result;
+}
+
+double tangent_plane_distance(const Mixture& mixture, double temperature_K, const Composition& x,
+                              const Composition& w) {
+  expects(x.size() == mixture.size() && w.size() == mixture.size(),
+          "stability: composition and mixture differ in size");
+  const Vec<double> at_x = mixture.ln_gamma(temperature_K, x);
+  const Vec<double> at_w = mixture.ln_gamma(temperature_K, w);
+  double sum = 0.0;
+  for (int i = 0; i < w.size(); ++i) {
+    sum += w[i] > 0.0 ? w[i] * (std::log(w[i] / x[i]) + at_w[i] - at_x[i]) : 0.0;
+  }
+  return sum;
+}
+
+Softness softest_direction(const Mixture& mixture, double temperature_K, const Composition& x) {
+  expects(x.size() == mixture.size(), "stability: composition and mixture differ in size");
+  const Members members = present(x);
+  Softness result;
+  result.direction = Composition(mixture.size(), 0.0);
+  if (members.size() < 2) {
+    return result;
+  }
+  const bool whole = members.size() == mixture.size();
+  const Softness inside = whole ? softest_in_face(mixture, temperature_K, x)
+                                : softest_in_face(mixture.face(members), temperature_K, in_face(x, members));
+  return {inside.curvature, in_mixture(inside.direction, members, mixture.size())};
+}
+
+}  // namespace stillshed
