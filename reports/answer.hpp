@@ -27,6 +27,7 @@ struct MeasuredMatch {
   std::string source;
   char tier = 'A';
   double pressure_Pa = 0.0;
+  Members members;                      ///< components of the record, indices into the mixture
   std::optional<double> temperature_K;
   Composition x;                        ///< whole-mixture order; empty: composition not given
   std::optional<double> dT_K;           ///< computed - measured, when the pressures agree within 5 %

@@ -260,6 +260,7 @@ void ResultWriter::measured(const std::vector<MeasuredMatch>& matches, const cha
     json_.open_object(Layout::inline_);
     json_.member("source", match.source);
     json_.member("tier", std::string_view(&match.tier, 1));
+    member_ids("components", match.members);
     json_.member("says_none", match.says_none);
     json_.member("pressure_Pa", match.pressure_Pa);
     json_.member("temperature_K", match.temperature_K);

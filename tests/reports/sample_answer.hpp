@@ -243,6 +243,7 @@ inline Answer ternary() {
   MeasuredMatch match;
   match.source = "Somebody & Other, J. Data 1 (1960) 2";
   match.pressure_Pa = 101325.0;
+  match.members = {0, 1};
   match.temperature_K = 328.65;
   match.x = {0.79, 0.21, 0.0};
   match.dT_K = -0.25;
@@ -251,6 +252,7 @@ inline Answer ternary() {
   MeasuredMatch none;
   none.source = "Nobody, J. Data 3 (1970) 4";
   none.pressure_Pa = 101325.0;
+  none.members = {1, 2};
   none.says_none = true;
   answer.measured_only = {none};
   answer.chart = ternary_chart(*answer.survey);
