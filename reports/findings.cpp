@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <cstdio>
 
 namespace stillshed {
 namespace {
@@ -73,6 +74,28 @@ std::string member_names(const Mixture& mixture, const Members& members, const c
     names += mixture.component(i).id;
   }
   return names;
+}
+
+std::string reading_words(const Answer& answer, const std::string& reading) {
+  std::size_t first = 0;
+  std::size_t second = 0;
+  if (std::sscanf(reading.c_str(), "batch[%zu].cuts[%zu]", &first, &second) == 2 && answer.reach.has_value() &&
+      first < answer.reach->batch.size()) {
+    const bool rectifier = answer.reach->batch[first].mode == Batch::Mode::rectifier;
+    return std::string("batch ") + (rectifier ? "rectifier" : "stripper") + ", cut " + std::to_string(second + 1);
+  }
+  if (std::sscanf(reading.c_str(), "batch[%zu].hee%*1[l]", &first) == 1 && reading.find("heel") != std::string::npos &&
+      answer.reach.has_value() && first < answer.reach->batch.size()) {
+    const bool rectifier = answer.reach->batch[first].mode == Batch::Mode::rectifier;
+    return std::string("batch ") + (rectifier ? "rectifier" : "stripper") + ", heel";
+  }
+  if (std::sscanf(reading.c_str(), "sequences[%zu].streams[%zu]", &first, &second) == 2 && answer.reach.has_value() &&
+      first < answer.reach->sequences.size() && second < answer.reach->sequences[first].streams.size()) {
+    const Sequence::Stream& stream = answer.reach->sequences[first].streams[second];
+    return "sequence " + std::to_string(first + 1) + ", " + (stream.distillate ? "distillate" : "bottoms") + " of column " +
+           std::to_string(stream.column + 1);
+  }
+  return reading;
 }
 
 Evidence weakest_evidence(const Answer& answer, const Members& members) {

@@ -28,6 +28,9 @@ namespace stillshed {
 /// "acetone + methanol" for the members of a face.
 [[nodiscard]] std::string member_names(const Mixture& mixture, const Members& members, const char* separator = " + ");
 
+/// "batch rectifier, cut 2" of "batch[0].cuts[1]"; counted from one. What is not understood comes back as it is.
+[[nodiscard]] std::string reading_words(const Answer& answer, const std::string& reading);
+
 /// Evidence mark of azeotrope k: "M" when a measurement lies within 0.5 K and 1 mol% at the same pressure,
 /// otherwise the weakest mark of the parameters its members use.
 [[nodiscard]] std::string azeotrope_evidence(const Answer& answer, std::size_t k);

@@ -81,6 +81,12 @@ std::string mass_percent_lines(const Answer& answer, const Composition& x) {
   return percent_lines(answer, x, mass_fractions(answer.mixture, x));
 }
 
+std::string test_markup(const ProductTest& test, const Mixture& mixture) {
+  std::string text = test_text(test, mixture);
+  const std::string sign = test.at_least ? ">=" : "<=";
+  return escape_markup(text.replace(text.rfind(sign), 2, test.at_least ? "\u2265" : "\u2264"));
+}
+
 std::string verdict_badge(Verdict verdict) {
   return "<span class=\"badge " + std::string(to_string(verdict)) + "\">" + verdict_word(verdict) + "</span>";
 }
@@ -185,7 +191,7 @@ std::string evidence_words(std::string_view mark) {
   if (mark == "U") {
     return "your own number, unjudged";
   }
-  return "none";
+  return "nothing: a parameter is missing";
 }
 
 }  // namespace stillshed

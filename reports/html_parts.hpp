@@ -34,6 +34,9 @@ class HtmlTable {
 [[nodiscard]] std::string mole_percent_lines(const Answer& answer, const Composition& x);
 [[nodiscard]] std::string mass_percent_lines(const Answer& answer, const Composition& x);
 
+/// A test of a product as markup, with the proper signs for "at least" and "at most".
+[[nodiscard]] std::string test_markup(const ProductTest& test, const Mixture& mixture);
+
 /// The verdict word in its own shape (readable in grey).
 [[nodiscard]] std::string verdict_badge(Verdict verdict);
 

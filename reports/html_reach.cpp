@@ -34,10 +34,10 @@ std::string where_words(const Answer& answer, const std::string& on) {
   return on == "face" ? "along an edge of the map" : "along " + place_words(answer, on);
 }
 
-std::string batch_table(const Answer& answer, const Batch& batch, std::size_t k) {
+std::string batch_table(const Answer& answer, const Batch& batch) {
   const bool rectifier = batch.mode == Batch::Mode::rectifier;
-  HtmlTable table(std::string("batch[") + std::to_string(k) + "]: " +
-                  (rectifier ? "batch rectifier, cuts in the order they leave overhead" : "batch stripper, cuts in the order they leave at the bottom"));
+  HtmlTable table(rectifier ? "Batch rectifier: cuts in the order they leave overhead"
+                            : "Batch stripper: cuts in the order they leave at the bottom");
   table.column("Cut");
   table.column("Leaves as");
   table.column(rectifier ? "Head, °C" : "Bottom, °C", true);
@@ -48,7 +48,7 @@ std::string batch_table(const Answer& answer, const Batch& batch, std::size_t k)
   table.column("Meanwhile the pot moves");
   for (std::size_t c = 0; c < batch.cuts.size(); ++c) {
     const Cut& cut = batch.cuts[c];
-    table.row({std::to_string(c), escape_markup(cut_name(answer, cut)), temperature_cell(cut), mole_percent_lines(answer, cut.average),
+    table.row({std::to_string(c + 1), escape_markup(cut_name(answer, cut)), temperature_cell(cut), mole_percent_lines(answer, cut.average),
                mass_percent_lines(answer, cut.average), escape_markup(share_percent(cut.share)),
                kilogram_cell(answer, cut.average, cut.share), escape_markup(where_words(answer, cut.on))});
   }
@@ -66,7 +66,7 @@ std::string batch_table(const Answer& answer, const Batch& batch, std::size_t k)
 std::string stream_cell(const Answer& answer, const Composition& x, double share) {
   std::string text = mole_percent_lines(answer, x);
   const std::optional<double> kg = kilograms(answer, x, share);
-  text += "<br/><i>" + escape_markup(share_percent(share)) + " mol% of the charge";
+  text += "<br/><i>" + (share < 1.0 - 1e-12 ? escape_markup(share_percent(share)) + " mol% of the charge" : "the whole charge");
   if (kg.has_value()) {
     text += ", " + kilogram_text(*kg);
   }
@@ -75,7 +75,7 @@ std::string stream_cell(const Answer& answer, const Composition& x, double share
 
 std::string sequence_table(const Answer& answer, std::size_t k) {
   const Sequence& sequence = answer.reach->sequences[k];
-  HtmlTable table("sequences[" + std::to_string(k) + "]: columns at total reflux, mol%");
+  HtmlTable table("Sequence " + std::to_string(k + 1) + ": columns at total reflux, mol%");
   table.column("Column");
   table.column("Fed by");
   table.column("Feed");
@@ -86,10 +86,10 @@ std::string sequence_table(const Answer& answer, std::size_t k) {
     const Column& column = sequence.columns[c];
     std::string source = "the charge";
     if (column.parent.has_value()) {
-      source = std::string(column.parent_distillate ? "distillate" : "bottoms") + " of column " + std::to_string(*column.parent);
+      source = std::string(column.parent_distillate ? "distillate" : "bottoms") + " of column " + std::to_string(*column.parent + 1);
     }
     const double distillate = column.feed_to_charge * column.distillate_to_feed;
-    table.row({std::to_string(c), source, stream_cell(answer, column.feed, column.feed_to_charge),
+    table.row({std::to_string(c + 1), source, stream_cell(answer, column.feed, column.feed_to_charge),
                stream_cell(answer, column.distillate, distillate),
                stream_cell(answer, column.bottoms, column.feed_to_charge - distillate), column.direct ? "direct" : "indirect"});
   }
@@ -136,8 +136,8 @@ std::string reach_section(const Answer& answer) {
   std::string text =
       "<p>Every amount here is the limit for unlimited stages and reflux, without recycle and without hold-up in the column; a real "
       "run takes longer and leaves less.</p>\n";
-  for (std::size_t k = 0; k < answer.reach->batch.size(); ++k) {
-    text += batch_table(answer, answer.reach->batch[k], k);
+  for (const Batch& batch : answer.reach->batch) {
+    text += batch_table(answer, batch);
   }
   const std::vector<std::size_t> chosen = sequences_to_print(answer, 3);
   for (const std::size_t k : chosen) {
@@ -168,7 +168,7 @@ std::string hold_section(const Answer& answer) {
     std::string met;
     for (const TestOutcome& item : outcome.tests) {
       const char* gap = asked.empty() ? "" : "<br/>";
-      asked += gap + escape_markup(test_text(item.test, answer.mixture));
+      asked += gap + test_markup(item.test, answer.mixture);
       limit += gap + escape_markup(reached_text(item));
       margin += gap + fixed(100.0 * item.margin, 2);
       met += std::string(gap) + (item.pass ? "yes" : "no");

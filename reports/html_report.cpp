@@ -50,19 +50,25 @@ std::string fact(const std::string& what, const std::string& value) {
   return "<div>" + element("dt", what) + element("dd", value) + "</div>\n";
 }
 
-std::string verdict_card(const Answer& answer, const ProductOutcome& outcome, std::size_t k) {
-  const std::string& name = answer.mixture.component(outcome.component).id;
+/// The tests as judged, or as written when nothing could be judged; markup.
+std::string asked_markup(const Answer& answer, const ProductOutcome& outcome) {
   std::string asked;
+  const auto add = [&asked](const std::string& test) { asked += (asked.empty() ? "" : ", ") + test; };
   for (const TestOutcome& item : outcome.tests) {
-    asked += (asked.empty() ? "" : ", ") + test_text(item.test, answer.mixture);
+    add(test_markup(item.test, answer.mixture));
   }
-  if (asked.empty()) {
-    for (const ProductWish& wish : answer.input.products) {
-      for (std::size_t t = 0; wish.id == name && t < wish.given_tests.size(); ++t) {
-        asked += (asked.empty() ? "" : ", ") + wish.given_tests[t];
+  for (const ProductWish& wish : answer.input.products) {
+    if (outcome.tests.empty() && wish.id == answer.mixture.component(outcome.component).id) {
+      for (const std::string& test : wish.given_tests) {
+        add(escape_markup(test));
       }
     }
   }
+  return asked;
+}
+
+std::string verdict_card(const Answer& answer, const ProductOutcome& outcome, std::size_t k) {
+  const std::string& name = answer.mixture.component(outcome.component).id;
   std::string text = "<article class=\"verdict " + std::string(to_string(outcome.verdict)) + "\">\n<h3>" + verdict_badge(outcome.verdict) + " " +
                      element("span", name, "product") + "</h3>\n";
   text += element("p", outcome.sentence.empty() ? std::string(verdict_meaning(outcome.verdict)) + "." : outcome.sentence) + "\n";
@@ -70,14 +76,15 @@ std::string verdict_card(const Answer& answer, const ProductOutcome& outcome, st
     text += purity_gauge(answer, outcome);
   }
   text += "<dl class=\"facts\">\n";
+  const std::string asked = asked_markup(answer, outcome);
   if (!asked.empty()) {
-    text += fact("asked", asked);
+    text += "<div>" + element("dt", "asked") + "<dd>" + asked + "</dd></div>\n";
   }
   if (outcome.verdict != Verdict::no_call) {
     text += fact("limit at unlimited stages", limit_percent(outcome.purity_limit_mass) + " wt%, " + limit_percent(outcome.purity_limit_mole) + " mol%");
     text += fact("recovery there", limit_percent(outcome.recovery, 1) + " %");
     if (!outcome.reading.empty()) {
-      text += fact("by", outcome.reading);
+      text += fact("by", reading_words(answer, outcome.reading));
     }
     if (outcome.purity_at_stages.has_value() && answer.input.plant.stages.has_value()) {
       text += fact("first drop with " + std::to_string(*answer.input.plant.stages) + " stages", limit_percent(*outcome.purity_at_stages) + " mol%");
