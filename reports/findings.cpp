@@ -79,15 +79,11 @@ std::string member_names(const Mixture& mixture, const Members& members, const c
 std::string reading_words(const Answer& answer, const std::string& reading) {
   std::size_t first = 0;
   std::size_t second = 0;
-  if (std::sscanf(reading.c_str(), "batch[%zu].cuts[%zu]", &first, &second) == 2 && answer.reach.has_value() &&
-      first < answer.reach->batch.size()) {
+  const int from_batch = std::sscanf(reading.c_str(), "batch[%zu].cuts[%zu]", &first, &second);
+  if (from_batch >= 1 && answer.reach.has_value() && first < answer.reach->batch.size()) {
     const bool rectifier = answer.reach->batch[first].mode == Batch::Mode::rectifier;
-    return std::string("batch ") + (rectifier ? "rectifier" : "stripper") + ", cut " + std::to_string(second + 1);
-  }
-  if (std::sscanf(reading.c_str(), "batch[%zu].hee%*1[l]", &first) == 1 && reading.find("heel") != std::string::npos &&
-      answer.reach.has_value() && first < answer.reach->batch.size()) {
-    const bool rectifier = answer.reach->batch[first].mode == Batch::Mode::rectifier;
-    return std::string("batch ") + (rectifier ? "rectifier" : "stripper") + ", heel";
+    return std::string("batch ") + (rectifier ? "rectifier" : "stripper") +
+           (from_batch == 2 ? ", cut " + std::to_string(second + 1) : std::string(", heel"));
   }
   if (std::sscanf(reading.c_str(), "sequences[%zu].streams[%zu]", &first, &second) == 2 && answer.reach.has_value() &&
       first < answer.reach->sequences.size() && second < answer.reach->sequences[first].streams.size()) {

@@ -137,6 +137,18 @@ std::string reached_text(const TestOutcome& outcome) {
          unit_of(outcome.test);
 }
 
+std::string purity_limit_text(const ProductOutcome& outcome) {
+  for (const TestOutcome& item : outcome.tests) {
+    if (item.test.what == ProductTest::What::purity && item.test.basis == Basis::mole) {
+      return limit_percent(outcome.purity_limit_mole, digits_against(item.test.value)) + " mol%";
+    }
+    if (item.test.what == ProductTest::What::purity) {
+      return limit_percent(outcome.purity_limit_mass, digits_against(item.test.value)) + " wt%";
+    }
+  }
+  return limit_percent(outcome.purity_limit_mass) + " wt%";
+}
+
 const char* verdict_word(Verdict verdict) {
   switch (verdict) {
     case Verdict::open: return "OPEN";

@@ -37,6 +37,9 @@ namespace stillshed {
 /// The value reached in such a test, rounded against us, with its unit.
 [[nodiscard]] std::string reached_text(const TestOutcome& outcome);
 
+/// Purity limit of a product on the basis its purity is asked for (mass when it is not): "86.53 wt%".
+[[nodiscard]] std::string purity_limit_text(const ProductOutcome& outcome);
+
 /// "OPEN", "TIGHT", "CAPPED", "SHUT", "NO CALL".
 [[nodiscard]] const char* verdict_word(Verdict verdict);
 /// What the word means, in a few words.

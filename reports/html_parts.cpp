@@ -11,11 +11,13 @@
 namespace stillshed {
 
 std::string element(std::string_view tag, std::string_view text, std::string_view css_class) {
-  std::string markup = "<" + std::string(tag);
+  std::string markup(1, '<');
+  markup += tag;
   if (!css_class.empty()) {
-    markup += " class=\"" + std::string(css_class) + "\"";
+    markup.append(" class=\"").append(css_class).append("\"");
   }
-  return markup + ">" + escape_markup(text) + "</" + std::string(tag) + ">";
+  markup.append(">").append(escape_markup(text)).append("</").append(tag).append(">");
+  return markup;
 }
 
 void HtmlTable::column(std::string heading, bool number) {

@@ -81,7 +81,7 @@ std::string verdict_card(const Answer& answer, const ProductOutcome& outcome, st
     text += "<div>" + element("dt", "asked") + "<dd>" + asked + "</dd></div>\n";
   }
   if (outcome.verdict != Verdict::no_call) {
-    text += fact("limit at unlimited stages", limit_percent(outcome.purity_limit_mass) + " wt%, " + limit_percent(outcome.purity_limit_mole) + " mol%");
+    text += fact("limit at unlimited stages", limit_percent(outcome.purity_limit_mass, 3) + " wt%, " + limit_percent(outcome.purity_limit_mole, 3) + " mol%");
     text += fact("recovery there", limit_percent(outcome.recovery, 1) + " %");
     if (!outcome.reading.empty()) {
       text += fact("by", reading_words(answer, outcome.reading));

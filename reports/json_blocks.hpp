@@ -46,6 +46,7 @@ class ResultWriter {
 
   void head();
   void model();
+  void pressure_record(int component);
   void components();
   void azeotropes();
   void azeotrope(std::size_t k);

@@ -163,15 +163,35 @@ void ResultWriter::model() {
   json_.close();
   json_.open_array("vapour_pressure");
   for (std::size_t i = 0; i < answer_.pressure_set_ids.size(); ++i) {
-    json_.open_object(Layout::inline_);
-    json_.member("component", id(static_cast<int>(i)));
-    json_.member("record", answer_.pressure_set_ids[i]);
-    if (i < answer_.pressure_evidence.size()) {
-      json_.member("evidence", to_string(answer_.pressure_evidence[i]));
-    }
-    json_.close();
+    pressure_record(static_cast<int>(i));
   }
   json_.close();
+  json_.close();
+}
+
+void ResultWriter::pressure_record(int i) {
+  const auto index = static_cast<std::size_t>(i);
+  const PressureSet& set = answer_.mixture.component(i).pressure.set();
+  WhyNull why;
+  json_.open_object(Layout::inline_);
+  json_.member("component", id(i));
+  json_.member("record", answer_.pressure_set_ids[index]);
+  json_.member("form", to_string(set.form));
+  numbers("coefficients", {set.coefficients.begin(), set.coefficients.end()});
+  for (const auto& [key, bound] : {std::pair("t_min_K", set.t_min_K), std::pair("t_max_K", set.t_max_K)}) {
+    json_.member(key, bound);
+    if (!bound.has_value()) {
+      why.add(key, "valid everywhere");
+    }
+  }
+  json_.member("source", set.source);
+  if (index < answer_.pressure_evidence.size()) {
+    json_.member("evidence", to_string(answer_.pressure_evidence[index]));
+  } else {
+    json_.member_null("evidence");
+    why.add("evidence", "not assessed");
+  }
+  why.write(json_);
   json_.close();
 }
 

@@ -135,7 +135,7 @@ void Screen::verdict(const ProductOutcome& outcome, std::size_t k) {
     line += ": asked " + tests;
   }
   if (outcome.verdict != Verdict::no_call) {
-    line += "; limit " + limit_percent(outcome.purity_limit_mass) + " wt%, recovery " + limit_percent(outcome.recovery, 1) + " %";
+    line += "; limit " + purity_limit_text(outcome) + ", recovery " + limit_percent(outcome.recovery, 1) + " %";
     if (outcome.purity_at_stages.has_value() && answer_.input.plant.stages.has_value()) {
       line += "; first drop with " + std::to_string(*answer_.input.plant.stages) + " stages " +
               limit_percent(*outcome.purity_at_stages) + " mol%";

@@ -29,6 +29,15 @@ TEST(Findings, Names) {
   EXPECT_EQ(member_names(sample::ternary().mixture, {0, 2}), "acetone + water");
 }
 
+TEST(Findings, ReadingsInWords) {
+  const Answer answer = sample::ternary();
+  EXPECT_EQ(reading_words(answer, "batch[0].cuts[1]"), "batch rectifier, cut 2");
+  EXPECT_EQ(reading_words(answer, "batch[0].heel"), "batch rectifier, heel");
+  EXPECT_EQ(reading_words(answer, "sequences[0].streams[1]"), "sequence 1, bottoms of column 1");
+  EXPECT_EQ(reading_words(answer, "sequences[7].streams[1]"), "sequences[7].streams[1]");
+  EXPECT_EQ(reading_words(answer, ""), "");
+}
+
 TEST(Findings, WeakestEvidenceOfTheMembersOnly) {
   Answer answer = sample::ternary();
   answer.pairs[0].evidence = Evidence::fitted;

@@ -68,7 +68,7 @@ TEST(JsonReport, OnlyComputedBlocks) {
 
 TEST(JsonReport, CompositionsFollowTheStreamOrder) {
   Answer answer = sample::binary();
-  answer.mixture = Mixture({sample::component("zeta", "", 20.0), sample::component("alpha", "", 60.0)}, Ideal{});
+  answer.mixture = Mixture({sample::component("zeta", "", 20.0), sample::component("alpha", "", 60.0)}, Ideal(2));
   const Json document = Json::parse(json_text(answer));
   EXPECT_THAT(keys(document["feed"]["mole_fractions"]), ElementsAre("zeta", "alpha"));
   EXPECT_DOUBLE_EQ(document["feed"]["mole_fractions"]["zeta"].get<double>(), 0.4);
