@@ -89,8 +89,7 @@ struct FaceProof {
 struct SurveyOptions {
   int prove_up_to = 5;                 ///< faces with at most this many members are proved
   std::int64_t max_boxes = 2'000'000;  ///< budget of one face
-  double min_relative_width =
-      1e-12;                      ///< a box narrower than this (relative to its distance from the faces) is a cluster
+  double cluster_width = 3e-8;  ///< a box narrower than this that no test settles is a cluster. Allowed: 1e-12 to 1e-3
   int stability_proof_up_to = 3;  ///< members; larger ones are searched only
   std::uint64_t seed = 1;
   std::stop_token stop;
