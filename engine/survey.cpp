@@ -55,6 +55,11 @@ Box to_full(const Box& part, const Members& members, int n) {
   return {to_full(part.lower, members, n), to_full(part.upper, members, n), part.t_lower_K, part.t_upper_K};
 }
 
+/// Proof effort grows steeply with the members of a face, and a large mixture has many faces.
+int default_proof_size(int components) {
+  return components <= 6 ? 5 : components <= 8 ? 4 : 3;
+}
+
 /// What one face contributes, in the order of `faces`.
 struct FaceWork {
   ProofResult proof;
@@ -69,6 +74,7 @@ class Surveyor {
       : mixture_(mixture),
         pressure_Pa_(pressure_Pa),
         options_(options),
+        prove_up_to_(options.prove_up_to > 0 ? options.prove_up_to : default_proof_size(mixture.size())),
         faces_(faces_of(mixture.size())),
         work_(faces_.size()) {
     for (std::size_t k = 0; k < faces_.size(); ++k) {
@@ -144,7 +150,7 @@ class Surveyor {
     }
     const FaceSystem system(mixture_.face(members), pressure_Pa_);
     work.located = locate_roots(system, nearby_starts(members), options_.seed);
-    if (members.size() <= options_.prove_up_to) {
+    if (members.size() <= prove_up_to_) {
       ProofOptions proof;
       proof.max_boxes = options_.max_boxes;
       proof.cluster_width = options_.cluster_width;
@@ -293,6 +299,7 @@ class Surveyor {
   const Mixture& mixture_;
   double pressure_Pa_;
   const SurveyOptions& options_;
+  int prove_up_to_;
   std::vector<Members> faces_;
   std::vector<FaceWork> work_;
   std::map<Mask, std::size_t> index_;
@@ -332,8 +339,8 @@ const char* to_string(Stability stability) {
 
 std::vector<std::string> SurveyOptions::problems() const {
   std::vector<std::string> found;
-  if (prove_up_to < 1 || prove_up_to > kMaxComponents) {
-    found.push_back("prove_up_to must be from 1 to 12");
+  if (prove_up_to < 0 || prove_up_to > kMaxComponents) {
+    found.push_back("prove_up_to must be from 0 to 12");
   }
   if (max_boxes < 1) {
     found.push_back("max_boxes must be at least 1");

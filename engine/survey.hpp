@@ -87,7 +87,8 @@ struct FaceProof {
 };
 
 struct SurveyOptions {
-  int prove_up_to = 5;                 ///< faces with at most this many members are proved
+  /// Faces with at most this many members are proved. 0: 5 in mixtures of up to 6 components, 4 up to 8, 3 beyond.
+  int prove_up_to = 0;
   std::int64_t max_boxes = 2'000'000;  ///< budget of one face
   double cluster_width = 3e-8;  ///< a box narrower than this that no test settles is a cluster. Allowed: 1e-12 to 1e-3
   int stability_proof_up_to = 3;  ///< members; larger ones are searched only
