@@ -1,8 +1,13 @@
 #include "models/vapour_pressure.hpp"
 
+#include <array>
 #include <cmath>
 #include <limits>
+#include <optional>
+#include <span>
+#include <string>
 #include <utility>
+#include <vector>
 
 #include "params/errors.hpp"
 
@@ -10,43 +15,74 @@ namespace stillshed {
 namespace {
 
 constexpr double kAtmosphere_Pa = 101325.0;
+constexpr double kInfinity = std::numeric_limits<double>::infinity();
+
+struct WagnerTerm {
+  double exponent;
+  std::size_t coefficient;  ///< index in PressureSet::coefficients
+};
+constexpr std::array<WagnerTerm, 4> kWagner25{{{1.0, 0}, {1.5, 1}, {2.5, 2}, {5.0, 3}}};
+constexpr std::array<WagnerTerm, 4> kWagner36{{{1.0, 0}, {1.5, 1}, {3.0, 2}, {6.0, 3}}};
+constexpr std::array<WagnerTerm, 6> kWagnerWater{{{1.0, 0}, {1.5, 1}, {3.0, 2}, {3.5, 3}, {4.0, 4}, {7.5, 5}}};
+
+std::span<const WagnerTerm> wagner_terms(PressureForm form) {
+  switch (form) {
+    case PressureForm::wagner_25: return kWagner25;
+    case PressureForm::wagner_36: return kWagner36;
+    case PressureForm::wagner_water: return kWagnerWater;
+    default: return {};
+  }
+}
+bool is_wagner(PressureForm form) { return !wagner_terms(form).empty(); }
+double critical_K(const PressureSet& set) { return set.coefficients[wagner_terms(set.form).size()]; }
+double critical_Pa(const PressureSet& set) { return set.coefficients[wagner_terms(set.form).size() + 1]; }
+
+std::size_t coefficient_count(PressureForm form) {
+  switch (form) {
+    case PressureForm::antoine_log10: return 3;
+    case PressureForm::perry_101: return 5;
+    case PressureForm::clausius_clapeyron: return 2;
+    default: return wagner_terms(form).size() + 2;
+  }
+}
+
+/// z^k for a whole or half-odd k >= 0: products and one square root, much cheaper than pow.
+template <class S>
+S half_power(const S& z, double k) {
+  using std::sqrt;
+  const int whole = static_cast<int>(k);
+  S result = k > whole ? sqrt(z) : S(1.0);
+  for (int i = 0; i < whole; ++i) {
+    result = result * z;
+  }
+  return result;
+}
+/// T^k for any real k, T > 0.
+template <class S>
+S real_power(const S& T, double k) {
+  using std::exp;
+  using std::log;
+  return k >= 0.0 && k == std::floor(k) && k <= 8.0 ? half_power(T, k) : exp(k * log(T));
+}
+
+/// t = 1 - T/Tc; never negative, because the range of the formula ends at Tc.
+double reduced(double T, double Tc) { return 1.0 - T / Tc; }
+Interval reduced(const Interval& T, double Tc) { return (1.0 - T / Tc).not_negative(); }
+
+/// k t^(k-1) - (k-1) t^k for t in [0, 1]: rises with t, so the end points of an interval enclose it.
+double wagner_bracket(double t, double k) { return half_power(t, k - 1.0) * (1.0 + (k - 1.0) * (1.0 - t)); }
+Interval wagner_bracket(const Interval& t, double k) {
+  const auto at = [k](double end) { return half_power(Interval(end), k - 1.0) * (1.0 + (k - 1.0) * (1.0 - Interval(end))); };
+  return {at(t.lower()).lower(), at(std::min(t.upper(), 1.0)).upper()};
+}
 
 template <class S>
-S constant_ln(double value) {
+S ln_of(double value) {
   using std::log;
   return log(S(value));
 }
 
-/// t^k for the half-integer powers of the Wagner forms.
-template <class S>
-S power(const S& t, double k) {
-  using std::pow;
-  return pow(t, k);
-}
-
-struct Term {
-  double coefficient;
-  double exponent;
-};
-
-/// Terms of the Wagner polynomial of a set, by form.
-std::array<Term, 6> wagner_terms(const PressureSet& set, int& count) {
-  const auto& c = set.coefficients;
-  switch (set.form) {
-    case PressureForm::wagner_25:
-      count = 4;
-      return {{{c[0], 1.0}, {c[1], 1.5}, {c[2], 2.5}, {c[3], 5.0}, {0, 1}, {0, 1}}};
-    case PressureForm::wagner_36:
-      count = 4;
-      return {{{c[0], 1.0}, {c[1], 1.5}, {c[2], 3.0}, {c[3], 6.0}, {0, 1}, {0, 1}}};
-    default: count = 6; return {{{c[0], 1.0}, {c[1], 1.5}, {c[2], 3.0}, {c[3], 3.5}, {c[4], 4.0}, {c[5], 7.5}}};
-  }
-}
-
-std::pair<double, double> wagner_critical(const PressureSet& set) {
-  const std::size_t at = set.form == PressureForm::wagner_water ? 6 : 4;
-  return {set.coefficients[at], set.coefficients[at + 1]};
-}
+std::string name_of(const PressureSet& set) { return set.id.empty() ? "vapour pressure" : set.id; }
 
 }  // namespace
 
@@ -55,202 +91,239 @@ S PressureCurve::formula(const S& T) const {
   using std::log;
   const auto& c = set_.coefficients;
   switch (set_.form) {
-    case PressureForm::antoine_log10: return (c[0] - c[1] / (T + c[2])) * constant_ln<S>(10.0);
-    case PressureForm::perry_101: {
-      const S last = c[3] * power(T, c[4]);
-      return c[0] + c[1] / T + c[2] * log(T) + last;
-    }
-    case PressureForm::clausius_clapeyron: return constant_ln<S>(kAtmosphere_Pa) + c[1] * (1.0 / S(c[0]) - 1.0 / T);
-    case PressureForm::wagner_25:
-    case PressureForm::wagner_36:
-    case PressureForm::wagner_water: break;
+    case PressureForm::antoine_log10: return (c[0] - c[1] / (T + c[2])) * ln_of<S>(10.0);
+    case PressureForm::perry_101: return c[0] + c[1] / T + c[2] * log(T) + c[3] * real_power(T, c[4]);
+    case PressureForm::clausius_clapeyron: return ln_of<S>(kAtmosphere_Pa) + c[1] * (1.0 / S(c[0]) - 1.0 / T);
+    default: break;
   }
-  const auto [Tc, Pc] = wagner_critical(set_);
-  const S t = 1.0 - T / Tc;
-  int count = 0;
-  const auto terms = wagner_terms(set_, count);
+  const double Tc = critical_K(set_);
+  const S t = reduced(T, Tc);
   S sum(0.0);
-  for (int k = 0; k < count; ++k) {
-    const Term& term = terms[static_cast<std::size_t>(k)];
-    sum += term.coefficient * power(t, term.exponent);
+  for (const WagnerTerm& term : wagner_terms(set_.form)) {
+    sum += c[term.coefficient] * half_power(t, term.exponent);
   }
-  return (Tc / T) * sum + constant_ln<S>(Pc);
+  return (Tc / T) * sum + ln_of<S>(critical_Pa(set_));
 }
 
 template <class S>
 S PressureCurve::formula_slope(const S& T) const {
-  using std::log;
+  const auto& c = set_.coefficients;
+  switch (set_.form) {
+    case PressureForm::antoine_log10: return c[1] * ln_of<S>(10.0) / square(T + c[2]);
+    case PressureForm::perry_101: return (c[2] - c[1] / T + (c[3] * S(c[4])) * real_power(T, c[4])) / T;
+    case PressureForm::clausius_clapeyron: return c[1] / square(T);
+    default: break;
+  }
+  // T^2/Tc dlnP/dT = -sum c [k t^(k-1) - (k-1) t^k]
+  const double Tc = critical_K(set_);
+  const S t = reduced(T, Tc);
+  S sum(0.0);
+  for (const WagnerTerm& term : wagner_terms(set_.form)) {
+    sum += c[term.coefficient] * wagner_bracket(t, term.exponent);
+  }
+  return -(Tc * sum) / square(T);
+}
+
+Interval PressureCurve::formula_curvature(const Interval& T) const {
   const auto& c = set_.coefficients;
   switch (set_.form) {
     case PressureForm::antoine_log10: {
-      const S reach = T + c[2];
-      return c[1] * constant_ln<S>(10.0) / (reach * reach);
+      const Interval reach = T + c[2];
+      return (-2.0 * c[1]) * ln_of<Interval>(10.0) / (square(reach) * reach);
     }
     case PressureForm::perry_101: {
-      const S power_term = (c[3] * S(c[4])) * power(T, c[4]);
-      return (c[2] - c[1] / T + power_term) / T;
+      const Interval last = (Interval(c[3]) * c[4]) * ((Interval(c[4]) - 1.0) * real_power(T, c[4]));
+      return (Interval(2.0) * c[1] / T - c[2] + last) / square(T);
     }
-    case PressureForm::clausius_clapeyron: return c[1] / (T * T);
-    case PressureForm::wagner_25:
-    case PressureForm::wagner_36:
-    case PressureForm::wagner_water: break;
+    case PressureForm::clausius_clapeyron: return (-2.0 * c[1]) / (square(T) * T);
+    default: break;
   }
-  // d/dT [(Tc/T) w(t)] = -[(Tc/T) w + w'] / T, written with (Tc/T) w + w' = sum c t^(k-1) (t Tc/T + k).
-  const auto [Tc, Pc] = wagner_critical(set_);
-  static_cast<void>(Pc);
-  const S t = 1.0 - T / Tc;
-  int count = 0;
-  const auto terms = wagner_terms(set_, count);
-  const S reduced = Tc / T - 1.0;  // t Tc / T
-  S sum(0.0);
-  for (int k = 0; k < count; ++k) {
-    const Term& term = terms[static_cast<std::size_t>(k)];
-    const S factor = reduced + term.exponent;
-    sum +=
-        term.exponent == 1.0 ? term.coefficient * factor : term.coefficient * (power(t, term.exponent - 1.0) * factor);
+  // With z = T/Tc and lnP = f(t)/z + const: d2lnP/dz2 = f''/z + 2 f'/z^2 + 2 f/z^3.
+  const double Tc = critical_K(set_);
+  const Interval t = reduced(T, Tc);
+  const Interval z = T / Tc;
+  Interval sum(0.0);
+  for (const WagnerTerm& term : wagner_terms(set_.form)) {
+    const double k = term.exponent;
+    Interval part = 2.0 * half_power(t, k) + (2.0 * k) * (half_power(t, k - 1.0) * z);
+    if (k > 1.0) {
+      const Interval bend = k >= 2.0 ? half_power(t, k - 2.0) : 1.0 / sqrt(t);
+      part += (k * (k - 1.0)) * (bend * square(z));
+    }
+    sum += c[term.coefficient] * part;
   }
-  return -sum / T;
+  return sum / (square(z) * z) / square(Interval(Tc));
 }
 
 PressureCurve::PressureCurve(PressureSet set) : set_(std::move(set)) {
-  constexpr double infinity = std::numeric_limits<double>::infinity();
-  low_K_ = set_.t_min_K.value_or(0.0);
-  high_K_ = set_.t_max_K.value_or(infinity);
-  if (set_.form == PressureForm::wagner_25 || set_.form == PressureForm::wagner_36 ||
-      set_.form == PressureForm::wagner_water) {
-    // t = 0 is the critical point; the slope of t^1.5 is still finite there, t itself must not go negative.
-    high_K_ = std::min(high_K_, wagner_critical(set_).first);
+  check_coefficients();
+  choose_range();
+  certify_rising();
+  certify_falling_slope();
+  const double low_K = low_.end_K;
+  const double high_K = high_.end_K;
+  low_ = continuation(low_K);
+  high_ = continuation(high_K);
+}
+
+void PressureCurve::check_coefficients() const {
+  std::vector<Problem> problems;
+  for (std::size_t k = 0; k < coefficient_count(set_.form); ++k) {
+    if (!std::isfinite(set_.coefficients[k])) {
+      problems.push_back({name_of(set_), "coefficient " + std::to_string(k) + " that is not a finite number",
+                          "finite numbers", "check the record"});
+    }
   }
-  if (low_K_ > 0.0 || std::isfinite(high_K_)) {
-    certify();
-  } else if (set_.form != PressureForm::clausius_clapeyron || !(set_.coefficients[1] > 0.0) ||
-             !(set_.coefficients[0] > 0.0)) {
-    throw InputError(Problem{set_.id.empty() ? "vapour pressure" : set_.id, "no temperature range",
-                             "a range for every form but clausius-clapeyron with positive boiling_point_K and H_K",
-                             "give t_min_K and t_max_K"});
+  if (is_wagner(set_.form) && !(critical_K(set_) > 0.0 && critical_Pa(set_) > 0.0)) {
+    problems.push_back({name_of(set_), "critical constants that are not positive", "Tc_K > 0 and Pc_Pa > 0", ""});
   }
-  if (low_K_ > 0.0) {
-    low_ln_p_ = formula(low_K_);
-    low_H_K_ = formula_slope(low_K_) * low_K_ * low_K_;
+  if (set_.form == PressureForm::clausius_clapeyron && !(set_.coefficients[0] > 0.0 && set_.coefficients[1] > 0.0)) {
+    problems.push_back({name_of(set_), "constants that are not positive", "boiling_point_K > 0 and H_K > 0", ""});
   }
-  if (std::isfinite(high_K_)) {
-    high_ln_p_ = formula(high_K_);
-    high_H_K_ = formula_slope(high_K_) * high_K_ * high_K_;
+  if (set_.form == PressureForm::perry_101 && (!set_.t_min_K || !set_.t_max_K)) {
+    problems.push_back({name_of(set_), "no temperature range", "t_min_K and t_max_K: the form holds in a range only",
+                        "give the range of the source"});
+  }
+  if (!problems.empty()) {
+    throw InputError(problems);
   }
 }
 
-void PressureCurve::certify() const {
-  const double low = low_K_ > 0.0 ? low_K_ : 1.0;
-  const double high = std::isfinite(high_K_) ? high_K_ : 10.0 * low;
-  if (!(low < high)) {
-    throw InputError(Problem{set_.id, "temperature range " + std::to_string(low) + " to " + std::to_string(high) + " K",
-                             "a lower end below the upper end", "check the record"});
+/// Where the formula is used. A set without a stated range keeps to where its form makes sense: Antoine from the
+/// temperature of 1 mPa (well above its pole) on, Wagner from 0.3 Tc to Tc.
+void PressureCurve::choose_range() {
+  const auto& c = set_.coefficients;
+  double low = 1.0;
+  double high = 1e4;
+  if (set_.form == PressureForm::antoine_log10) {
+    constexpr double kLogOfMillipascal = -3.0;
+    low = std::max(low, c[1] / (c[0] - kLogOfMillipascal) - c[2]);
+  } else if (is_wagner(set_.form)) {
+    low = 0.3 * critical_K(set_);
+    high = critical_K(set_);
   }
-  // Bisect until every piece has a slope enclosure above zero; a piece narrower than 1 mK is a failure.
-  std::array<std::pair<double, double>, 128> stack;
-  std::size_t depth = 0;
-  stack[depth++] = {low, high};
-  while (depth > 0) {
-    const auto [a, b] = stack[--depth];
-    if (formula_slope(Interval(a, b)).is_positive()) {
+  low = set_.t_min_K.value_or(low);
+  high = std::min(set_.t_max_K.value_or(high), is_wagner(set_.form) ? critical_K(set_) : kInfinity);
+  if (!(low > 0.0) || !(low < high) || !std::isfinite(high)) {
+    throw InputError(Problem{name_of(set_), "temperature range " + std::to_string(low) + " to " + std::to_string(high) + " K",
+                             "a positive lower end below a finite upper end", "check the record"});
+  }
+  low_.end_K = low;
+  high_.end_K = high;
+}
+
+/// Bisects the range until every piece has a slope enclosure above zero.
+void PressureCurve::certify_rising() const {
+  constexpr double kNarrowest_K = 1e-3;
+  std::vector<Interval> pieces{Interval(low_.end_K, high_.end_K)};
+  while (!pieces.empty()) {
+    const Interval piece = pieces.back();
+    pieces.pop_back();
+    if (formula_slope(piece).is_positive()) {
       continue;
     }
-    const double middle = 0.5 * (a + b);
-    if (b - a < 1e-3 || depth + 2 > stack.size()) {
-      throw InputError(Problem{set_.id, "vapour pressure that does not rise near " + std::to_string(middle) + " K",
+    if (piece.width() < kNarrowest_K) {
+      throw InputError(Problem{name_of(set_),
+                               "a vapour pressure that does not rise near " + std::to_string(piece.mid()) + " K",
                                "a curve that rises over its whole range", "check coefficients, units and range"});
     }
-    stack[depth++] = {a, middle};
-    stack[depth++] = {middle, b};
+    pieces.emplace_back(piece.lower(), piece.mid());
+    pieces.emplace_back(piece.mid(), piece.upper());
   }
+}
+
+/// Walks up the range in steps whose curvature enclosure is below zero; halves the step where it is not.
+void PressureCurve::certify_falling_slope() {
+  const double high = high_.end_K;
+  double at = low_.end_K;
+  double step = 0.25 * (high - at);
+  while (at < high && step > 1e-3 * (high - low_.end_K)) {
+    const double next = std::min(at + step, high);
+    if (formula_curvature(Interval(at, next)).is_negative()) {
+      at = next;
+    } else {
+      step *= 0.5;
+    }
+  }
+  falling_to_K_ = at;
+}
+
+PressureCurve::Continuation PressureCurve::continuation(double end_K) const {
+  const Interval exact(end_K);
+  Continuation line;
+  line.end_K = end_K;
+  line.inverse_end = {1.0 / end_K, 1.0 / exact};
+  line.ln_p = {formula(end_K), formula(exact)};
+  line.H_K = {formula_slope(end_K) * end_K * end_K, formula_slope(exact) * square(exact)};
+  return line;
 }
 
 bool PressureCurve::covers(double temperature_K) const {
   return (!set_.t_min_K || temperature_K >= *set_.t_min_K) && (!set_.t_max_K || temperature_K <= *set_.t_max_K);
 }
 
-double PressureCurve::ln_psat(double T) const {
-  if (T < low_K_) {
-    return low_ln_p_ + low_H_K_ * (1.0 / low_K_ - 1.0 / T);
-  }
-  if (T > high_K_) {
-    return high_ln_p_ + high_H_K_ * (1.0 / high_K_ - 1.0 / T);
-  }
-  return formula(T);
+template <class S>
+S PressureCurve::ln_psat_at(double T) const {
+  return T < low_.end_K ? low_.value(S(T)) : T > high_.end_K ? high_.value(S(T)) : formula(S(T));
+}
+template <class S>
+S PressureCurve::slope_at(double T) const {
+  return T < low_.end_K ? low_.slope(S(T)) : T > high_.end_K ? high_.slope(S(T)) : formula_slope(S(T));
 }
 
-double PressureCurve::d_ln_psat_dT(double T) const {
-  if (T < low_K_) {
-    return low_H_K_ / (T * T);
-  }
-  if (T > high_K_) {
-    return high_H_K_ / (T * T);
-  }
-  return formula_slope(T);
-}
+double PressureCurve::ln_psat(double T) const { return ln_psat_at<double>(T); }
+double PressureCurve::d_ln_psat_dT(double T) const { return slope_at<double>(T); }
 
 Interval PressureCurve::ln_psat(const Interval& T) const {
-  if (!(T.lower() > 0.0) || !std::isfinite(T.upper())) {
+  if (!T.is_positive() || !T.is_bounded()) {
     return Interval::whole();
   }
-  const auto at = [this](double t) {
-    if (t < low_K_) {
-      return low_ln_p_ + low_H_K_ * (1.0 / Interval(low_K_) - 1.0 / Interval(t));
-    }
-    if (t > high_K_) {
-      return high_ln_p_ + high_H_K_ * (1.0 / Interval(high_K_) - 1.0 / Interval(t));
-    }
-    return formula(Interval(t));
-  };
-  // Rising everywhere (certified), so the end points enclose. The continuation starts at a rounded value of the
-  // formula: widen by that rounding so that both sides of the joint are covered.
-  const Interval low = at(T.lower());
-  const Interval high = at(T.upper());
-  const double joint =
-      64.0 * std::numeric_limits<double>::epsilon() * (1.0 + std::max(low.magnitude(), high.magnitude()));
-  return {low.lower() - joint, high.upper() + joint};
+  return {ln_psat_at<Interval>(T.lower()).lower(), ln_psat_at<Interval>(T.upper()).upper()};
 }
 
 Interval PressureCurve::d_ln_psat_dT(const Interval& T) const {
-  if (!(T.lower() > 0.0) || !std::isfinite(T.upper())) {
+  if (!T.is_positive() || !T.is_bounded()) {
     return Interval::whole();
   }
-  bool any = false;
-  Interval result;
-  const auto add = [&](const Interval& piece) {
-    result = any ? hull(result, piece) : piece;
-    any = true;
-  };
-  if (T.lower() < low_K_) {
-    const Interval part(T.lower(), std::min(T.upper(), low_K_));
-    add(low_H_K_ / (part * part));
+  // Falling from the low continuation through the range up to falling_to_K_: end points enclose.
+  if (T.upper() <= falling_to_K_ || falling_to_K_ == high_.end_K) {
+    return {slope_at<Interval>(T.upper()).lower(), slope_at<Interval>(T.lower()).upper()};
   }
-  if (T.upper() > high_K_) {
-    const Interval part(std::max(T.lower(), high_K_), T.upper());
-    add(high_H_K_ / (part * part));
+  std::optional<Interval> result;
+  const auto add = [&result](const Interval& piece) { result = result ? hull(*result, piece) : piece; };
+  if (T.lower() < falling_to_K_) {
+    add({slope_at<Interval>(falling_to_K_).lower(), slope_at<Interval>(T.lower()).upper()});
   }
   Interval inside = T;
-  if (intersect(inside, Interval(low_K_, high_K_))) {
+  if (intersect(inside, Interval(falling_to_K_, high_.end_K))) {
     add(formula_slope(inside));
   }
-  return result;
+  if (T.upper() > high_.end_K) {
+    add(high_.slope(Interval(std::max(T.lower(), high_.end_K), T.upper())));
+  }
+  return *result;
 }
 
 double PressureCurve::boiling_point_K(double pressure_Pa) const {
+  if (!(pressure_Pa > 0.0)) {
+    return pressure_Pa == 0.0 ? 0.0 : std::numeric_limits<double>::quiet_NaN();
+  }
   const double target = std::log(pressure_Pa);
-  // Newton in 1/T, where ln P is nearly a line; rising everywhere, so it cannot leave for good.
-  double T = low_K_ > 0.0 && std::isfinite(high_K_) ? 0.5 * (low_K_ + high_K_) : 350.0;
+  if (target >= high_.ln_p.value + high_.H_K.value * high_.inverse_end.value) {
+    return kInfinity;
+  }
+  // Newton in 1/T, where ln P is nearly a line, kept between bounds that close in on the root.
   double below = 0.0;
-  double above = std::numeric_limits<double>::infinity();
-  for (int step = 0; step < 100; ++step) {
+  double above = kInfinity;
+  double T = std::min(std::max(350.0, low_.end_K), high_.end_K);
+  for (int step = 0; step < 200; ++step) {
     const double miss = ln_psat(T) - target;
     (miss > 0.0 ? above : below) = T;
-    const double slope_in_inverse = -d_ln_psat_dT(T) * T * T;
-    double next = 1.0 / (1.0 / T - miss / slope_in_inverse);
+    double next = 1.0 / (1.0 / T + miss / (d_ln_psat_dT(T) * T * T));
     if (!(next > below) || !(next < above)) {
       next = std::isfinite(above) ? 0.5 * (below + above) : 2.0 * T;
     }
-    if (std::abs(next - T) <= 4e-16 * T) {
+    if (std::abs(next - T) <= 2e-16 * T) {
       return next;
     }
     T = next;
@@ -261,20 +334,21 @@ double PressureCurve::boiling_point_K(double pressure_Pa) const {
 Interval PressureCurve::temperature_at(const Interval& ln_pressure) const {
   // Widen a double solution until the enclosure of ln P at the end lies beyond the target: proved by monotonicity.
   const auto bound = [this](double target, double side) {
-    if (!std::isfinite(target)) {
-      return side < 0.0 ? 0.0 : std::numeric_limits<double>::infinity();
-    }
-    double step = 1e-14;
+    const double unknown = side < 0.0 ? 0.0 : kInfinity;
     const double T = boiling_point_K(std::exp(target));
-    for (int k = 0; k < 40; ++k) {
+    if (!std::isfinite(target) || !std::isfinite(T)) {
+      return unknown;
+    }
+    double step = 1e-15;
+    for (int k = 0; k < 60; ++k) {
       const double candidate = T * (1.0 + side * step);
       const Interval value = ln_psat(Interval(candidate));
       if (side < 0.0 ? value.upper() <= target : value.lower() >= target) {
         return candidate;
       }
-      step *= 4.0;
+      step *= 2.0;
     }
-    return side < 0.0 ? 0.0 : std::numeric_limits<double>::infinity();
+    return unknown;
   };
   return {bound(ln_pressure.lower(), -1.0), bound(ln_pressure.upper(), 1.0)};
 }

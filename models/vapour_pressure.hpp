@@ -8,17 +8,21 @@
 ///   clausius_clapeyron  ln(P/101325 Pa) = H (1/Tb - 1/T)
 ///
 /// Outside [t_min_K, t_max_K] the curve goes on as the Clausius-Clapeyron line through the end point with the slope
-/// there (ln P linear in 1/T): no pole, rising everywhere. A result that used it is marked as stretched.
+/// there (ln P linear in 1/T): no Antoine pole, rising everywhere, value and slope continuous. `covers` tells a caller
+/// that a result used it.
 ///
 /// Symbols   T [K], P [Pa]. Sources: params/sources.json, key in the set.
-/// Numbers   double, Interval, and Jets of both (chain rule: the only place where a model looks at a value of T).
-/// Proof     the curve is certified to rise over its range once, at construction, by interval evaluation of dlnP/dT;
-///           an Interval argument is then enclosed by its end points.
-/// Errors    construction throws InputError when the set does not rise over its range.
+/// Numbers   double, Interval, and Jets of both (by the chain rule). The choice between formula and continuation is the
+///           only place where a model looks at a value of T.
+/// Proof     once, at construction, dlnP/dT > 0 is shown over the range by interval evaluation and bisection, and
+///           d2lnP/dT2 < 0 up to the highest temperature where that can be shown (Wagner curves turn near Tc). So
+///           ln P of an interval is enclosed by its end points, and so is the slope where it is known to fall.
+/// Errors    construction throws InputError for bad coefficients, a bad range, or a curve that does not rise over it.
 #pragma once
 
 #include <ceres/jet.h>
 
+#include "models/enclosed.hpp"
 #include "models/interval.hpp"
 #include "models/jet_interval.hpp"
 #include "params/records.hpp"
@@ -31,7 +35,7 @@ class PressureCurve {
   explicit PressureCurve(PressureSet set);
 
   [[nodiscard]] const PressureSet& set() const { return set_; }
-  /// True when the published range (if any) holds this temperature.
+  /// True when the published range holds this temperature (a missing end: no limit on that side).
   [[nodiscard]] bool covers(double temperature_K) const;
 
   /// ln(P / Pa).
@@ -50,23 +54,47 @@ class PressureCurve {
   [[nodiscard]] double d_ln_psat_dT(double temperature_K) const;
   [[nodiscard]] Interval d_ln_psat_dT(const Interval& temperature_K) const;
 
-  /// Temperature at which P is the vapour pressure [K].
+  /// Temperature at which P is the vapour pressure [K]; infinite above the pressure that the continuation tends to.
   [[nodiscard]] double boiling_point_K(double pressure_Pa) const;
   /// Encloses every T with ln P(T) in this interval.
   [[nodiscard]] Interval temperature_at(const Interval& ln_pressure) const;
 
  private:
+  /// The part of the curve beyond one end of the range: ln P = ln_p + H (1/end - 1/T).
+  struct Continuation {
+    double end_K = 0.0;
+    Enclosed inverse_end;
+    Enclosed ln_p;
+    Enclosed H_K;
+    template <class S>
+    [[nodiscard]] S value(const S& T) const {
+      return constant<S>(ln_p) + constant<S>(H_K) * (constant<S>(inverse_end) - 1.0 / T);
+    }
+    template <class S>
+    [[nodiscard]] S slope(const S& T) const {
+      return constant<S>(H_K) / square(T);
+    }
+  };
+
   template <class S>
   [[nodiscard]] S formula(const S& T) const;
   template <class S>
   [[nodiscard]] S formula_slope(const S& T) const;
-  void certify() const;
+  [[nodiscard]] Interval formula_curvature(const Interval& T) const;
+  template <class S>
+  [[nodiscard]] S ln_psat_at(double T) const;
+  template <class S>
+  [[nodiscard]] S slope_at(double T) const;
+  void check_coefficients() const;
+  void choose_range();
+  void certify_rising() const;
+  void certify_falling_slope();
+  [[nodiscard]] Continuation continuation(double end_K) const;
 
   PressureSet set_;
-  double low_K_ = 0.0;  ///< range of the formula
-  double high_K_ = 0.0;
-  double low_ln_p_ = 0.0, low_H_K_ = 0.0;    ///< continuation below: ln P = low_ln_p + low_H (1/low - 1/T)
-  double high_ln_p_ = 0.0, high_H_K_ = 0.0;  ///< continuation above
+  double falling_to_K_ = 0.0;  ///< dlnP/dT is shown to fall up to here
+  Continuation low_;
+  Continuation high_;
 };
 
 }  // namespace stillshed
