@@ -77,7 +77,8 @@ class Frame {
 };
 
 void heading(Svg& svg, const Answer& answer, const std::string& title) {
-  svg.text({kLeft + 0.5 * kPlotWidth, 24}, title, text_style(16, ink::kText, "font-weight=\"600\""), Anchor::middle);
+  svg.text({kLeft + 0.5 * kPlotWidth, 24}, title,
+           text_style(fitting_size(title, 16, kWidth - 20), ink::kText, "font-weight=\"600\""), Anchor::middle);
   svg.text({kLeft + 0.5 * kPlotWidth, 44}, "mole fractions · " + pressure_text(answer.input.pressure_Pa) + " · " + answer.model_kind,
            text_style(13, ink::kSoft), Anchor::middle);
 }

@@ -97,6 +97,10 @@ double overlap_area(const Rectangle& a, const Rectangle& b) {
 
 double text_width(std::string_view text, double font_size) { return 0.56 * font_size * display_width(text); }
 
+double fitting_size(std::string_view text, double font_size, double width) {
+  return std::clamp(font_size * width / std::max(text_width(text, font_size), 1.0), std::min(9.0, font_size), font_size);
+}
+
 void LabelPlacer::keep_clear(const std::vector<Point>& polyline, double weight) {
   constexpr double kStep = 4.0;
   for (std::size_t k = 1; k < polyline.size(); ++k) {

@@ -58,6 +58,9 @@ struct Rectangle {
 /// Rough width of text set in a proportional face.
 [[nodiscard]] double text_width(std::string_view text, double font_size);
 
+/// The font size asked for, or the smaller one at which the text is at most that wide (never below 9).
+[[nodiscard]] double fitting_size(std::string_view text, double font_size, double width);
+
 /// Finds room for labels: tries places around an anchor and takes the one that covers least.
 class LabelPlacer {
  public:

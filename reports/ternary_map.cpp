@@ -1,14 +1,14 @@
 #include "reports/ternary_map.hpp"
 
 #include <algorithm>
+#include <array>
 #include <cmath>
-#include <numeric>
-#include <optional>
 
 #include "params/errors.hpp"
 #include "reports/findings.hpp"
 #include "reports/format.hpp"
 #include "reports/plot_marks.hpp"
+#include "reports/triangle.hpp"
 
 namespace stillshed {
 namespace {
@@ -17,7 +17,6 @@ constexpr double kWidth = 760.0;
 constexpr double kSide = 540.0;
 constexpr Point kLeftCorner{110.0, 590.0};
 constexpr double kLegendTop = 672.0;
-const double kHeightOverSide = std::sqrt(3.0) / 2.0;
 
 constexpr std::array<const char*, 6> kTints = {"#f6efdf", "#e3edf2", "#ece7f3", "#e6efe0", "#f5e6e4", "#edeeee"};
 
@@ -78,7 +77,8 @@ class MapDrawing {
   const Chart* chart() const { return answer_.chart.has_value() ? &*answer_.chart : nullptr; }
 
   void heading(const std::string& title) {
-    svg_->text({kWidth / 2, 24}, title, text_style(17, ink::kText, "font-weight=\"600\""), Anchor::middle);
+    svg_->text({kWidth / 2, 24}, title, text_style(fitting_size(title, 17, kWidth - 20), ink::kText, "font-weight=\"600\""),
+               Anchor::middle);
     svg_->text({kWidth / 2, 45}, "mole fractions · " + pressure_text(answer_.input.pressure_Pa) + " · " + answer_.model_kind,
                text_style(13, ink::kSoft), Anchor::middle);
   }
@@ -351,35 +351,6 @@ class MapDrawing {
 };
 
 }  // namespace
-
-Triangle::Triangle(Point left_corner, double side, std::array<int, 3> order)
-    : corners_{left_corner + Point{0.5 * side, -kHeightOverSide * side}, left_corner, left_corner + Point{side, 0.0}},
-      side_(side),
-      order_(order) {}
-
-Point Triangle::at(const Composition& x) const {
-  expects(x.size() == 3, "Triangle: three components needed");
-  return x[order_[0]] * corners_[0] + x[order_[1]] * corners_[1] + x[order_[2]] * corners_[2];
-}
-
-Composition Triangle::composition(Point point) const {
-  Composition x(3);
-  const double top = (corners_[1].y - point.y) / (kHeightOverSide * side_);
-  const double right = (point.x - corners_[1].x) / side_ - 0.5 * top;
-  x[order_[0]] = top;
-  x[order_[1]] = 1.0 - top - right;
-  x[order_[2]] = right;
-  return x;
-}
-
-std::array<int, 3> corners_by_boiling_point(const Survey& survey) {
-  expects(survey.pure.size() == 3, "ternary map: three components needed");
-  std::array<int, 3> order{0, 1, 2};
-  std::stable_sort(order.begin(), order.end(), [&survey](int a, int b) {
-    return survey.pure[static_cast<std::size_t>(a)].temperature_K < survey.pure[static_cast<std::size_t>(b)].temperature_K;
-  });
-  return order;
-}
 
 std::string ternary_map_svg(const Answer& answer) {
   expects(answer.mixture.size() == 3 && answer.survey.has_value(), "ternary map: three components and a survey needed");

@@ -38,6 +38,14 @@ TEST(PlotMarks, OverlapArea) {
   EXPECT_DOUBLE_EQ(overlap_area({0, 0, 1, 1}, {1, 0, 2, 1}), 0.0);
 }
 
+TEST(PlotMarks, LongTextIsSetSmaller) {
+  EXPECT_DOUBLE_EQ(fitting_size("short", 17, 700), 17.0);
+  const std::string name(120, 'x');
+  EXPECT_LT(fitting_size(name, 17, 700), 17.0);
+  EXPECT_LE(text_width(name, fitting_size(name, 17, 700)), 700.0 + 1e-9);
+  EXPECT_DOUBLE_EQ(fitting_size(std::string(1000, 'x'), 17, 700), 9.0);
+}
+
 TEST(PlotMarks, LabelsKeepApart) {
   LabelPlacer placer({0, 0, 400, 400});
   placer.keep_clear(Rectangle{190, 190, 210, 210});
