@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <cmath>
 
+#include "engine/bubble_point.hpp"
 #include "params/errors.hpp"
 #include "reports/findings.hpp"
 #include "reports/format.hpp"
@@ -116,6 +117,25 @@ std::string words(const Answer& answer) {
 }
 
 }  // namespace
+
+std::optional<BinaryPhases> binary_phases(const Answer& answer) {
+  constexpr int kPieces = 100;
+  if (answer.mixture.size() != 2 || !answer.survey.has_value()) {
+    return std::nullopt;
+  }
+  BinaryPhases phases;
+  double guess_K = 0.0;
+  for (int k = 0; k <= kPieces; ++k) {
+    const double x = static_cast<double>(k) / kPieces;
+    const BubblePoint point = bubble_point(answer.mixture, {x, 1.0 - x}, answer.input.pressure_Pa, guess_K);
+    if (point.status != Status::complete) {
+      return std::nullopt;
+    }
+    phases.rows.push_back({x, point.y[0], point.temperature_K});
+    guess_K = point.temperature_K;
+  }
+  return phases;
+}
 
 TickSteps tick_steps(double low, double high, int wanted) {
   expects(high > low && wanted > 0, "tick_steps: empty range");

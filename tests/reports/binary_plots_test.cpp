@@ -2,6 +2,8 @@
 
 #include <gtest/gtest.h>
 
+#include <cmath>
+
 #include "tests/reports/sample_answer.hpp"
 #include "tests/reports/validate.hpp"
 
@@ -25,6 +27,22 @@ TEST(BinaryPlots, TicksAreRound) {
   EXPECT_NEAR(narrow.step, 0.02, 1e-12);
   EXPECT_NEAR(narrow.first, 99.96, 1e-9);
   EXPECT_DOUBLE_EQ(tick_steps(0.0, 1000.0, 10).step, 100.0);
+}
+
+TEST(BinaryPlots, PhasesOfAnIdealBinaryFollowTheClosedForm) {
+  // Equal slopes: the relative volatility does not depend on temperature, y = a x / (1 + (a - 1) x).
+  Answer answer = sample::binary();
+  answer.mixture = Mixture({sample::component("A", "", 60.0, 350.0), sample::component("B", "", 60.0, 360.0)}, Ideal(2));
+  const auto phases = binary_phases(answer);
+  ASSERT_TRUE(phases.has_value());
+  ASSERT_EQ(phases->rows.size(), 101U);
+  const double alpha = std::exp(4000.0 * (1.0 / 350.0 - 1.0 / 360.0));
+  for (const BinaryPhases::Row& row : phases->rows) {
+    EXPECT_NEAR(row.y, alpha * row.x / (1.0 + (alpha - 1.0) * row.x), 1e-11);
+  }
+  EXPECT_NEAR(phases->rows.front().temperature_K, 360.0, 1e-8);
+  EXPECT_NEAR(phases->rows.back().temperature_K, 350.0, 1e-8);
+  EXPECT_FALSE(binary_phases(sample::ternary()).has_value());
 }
 
 TEST(BinaryPlots, TemperaturePlotHoldsWhatAReaderNeeds) {

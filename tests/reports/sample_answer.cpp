@@ -179,11 +179,16 @@ Reach ternary_reach(const Composition& feed) {
 
 }  // namespace
 
-MixtureComponent component(const std::string& id, const std::string& cas, double molar_mass_g_mol) {
+MixtureComponent component(const std::string& id, const std::string& cas, double molar_mass_g_mol, double boiling_point_K) {
   MixtureComponent item;
   item.id = id;
   item.cas = cas;
   item.molar_mass_g_mol = molar_mass_g_mol;
+  PressureSet set;
+  set.id = "user";
+  set.form = PressureForm::clausius_clapeyron;
+  set.coefficients = {boiling_point_K, 4000.0};
+  item.pressure = PressureCurve(set);
   return item;
 }
 
@@ -223,8 +228,8 @@ Answer ternary() {
   answer.input.plant.stages = 3;
   answer.input.echo_json = R"({"stillshed_case": 1, "title": "Wash solvent <T-4> & \"rest\""})";
   answer.input.products = {{"acetone", {">= 99.5 wt%"}, {}, false}};
-  answer.mixture = Mixture({component("acetone", "67-64-1", 58.08), component("methanol", "67-56-1", 32.04),
-                            component("water", "7732-18-5", 18.015)},
+  answer.mixture = Mixture({component("acetone", "67-64-1", 58.08, 329.2), component("methanol", "67-56-1", 32.04, 337.7),
+                            component("water", "7732-18-5", 18.015, 373.15)},
                            Ideal(3));
   answer.model_kind = "unifac-dortmund";
   answer.model_note = "every group pair is on file";
@@ -271,7 +276,7 @@ Answer binary() {
   answer.input.title.clear();
   answer.input.stream.resize(2);
   answer.input.amount_kg.reset();
-  answer.mixture = Mixture({component("acetone", "67-64-1", 58.08), component("methanol", "", 32.04)}, Ideal(2));
+  answer.mixture = Mixture({component("acetone", "67-64-1", 58.08, 329.2), component("methanol", "", 32.04, 337.7)}, Ideal(2));
   answer.pairs.resize(1);
   answer.pressure_set_ids.resize(2);
   answer.pressure_evidence.resize(2);
