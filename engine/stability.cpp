@@ -4,8 +4,8 @@
 #include <Eigen/Eigenvalues>
 #include <algorithm>
 #include <cmath>
-#include <optional>
 #include <random>
+#include <variant>
 
 #include "engine/stability_proof.hpp"
 
@@ -29,6 +29,33 @@ Composition normalised(const Composition& x) {
   }
   for (double& value : result) {
     value /= sum;
+  }
+  return result;
+}
+
+Members present(const Composition& x) {
+  Members members;
+  for (int i = 0; i < x.size(); ++i) {
+    expects(x[i] >= 0.0, "stability: negative mole fraction");
+    if (x[i] > 0.0) {
+      members.push_back(i);
+    }
+  }
+  return members;
+}
+
+Composition in_face(const Composition& x, const Members& members) {
+  Composition result(members.size());
+  for (int a = 0; a < members.size(); ++a) {
+    result[a] = x[members[a]];
+  }
+  return result;
+}
+
+Composition in_mixture(const Composition& x, const Members& members, int size) {
+  Composition result(size, 0.0);
+  for (int a = 0; a < members.size(); ++a) {
+    result[members[a]] = x[a];
   }
   return result;
 }
@@ -223,8 +250,9 @@ Composition moved(const Composition& x, const Composition& direction, double sig
   return normalised(result);
 }
 
-std::vector<Composition> starting_points(const Reference& reference, const Softness& softness,
-                                         const StabilityOptions& options, const Members& members) {
+/// Pure liquids, both ways along the softest direction, and what the caller gave: enough to find nearly every split.
+std::vector<Composition> first_starts(const Reference& reference, const Softness& softness,
+                                      const StabilityOptions& options, const Members& members) {
   const int n = reference.x.size();
   std::vector<Composition> starts;
   for (int k = 0; k < n; ++k) {
@@ -232,6 +260,22 @@ std::vector<Composition> starting_points(const Reference& reference, const Softn
     pure[k] = 1.0;
     starts.push_back(pure);
   }
+  for (const double share : {0.02, 0.5}) {
+    starts.push_back(moved(reference.x, softness.direction, 1.0, share));
+    starts.push_back(moved(reference.x, softness.direction, -1.0, share));
+  }
+  for (const Composition& given : options.starts) {
+    expects(given.size() > members[members.size() - 1], "stability: a starting point has the wrong size");
+    starts.push_back(normalised(in_face(given, members)));
+  }
+  return starts;
+}
+
+/// Midpoints of pairs, the barycentre, the reply of an ideal liquid, far along the softest direction, seeded points.
+std::vector<Composition> further_starts(const Reference& reference, const Softness& softness,
+                                        const StabilityOptions& options) {
+  const int n = reference.x.size();
+  std::vector<Composition> starts;
   for (int a = 0; a < n; ++a) {
     for (int b = a + 1; b < n; ++b) {
       Composition middle(n, 0.0);
@@ -241,23 +285,13 @@ std::vector<Composition> starting_points(const Reference& reference, const Softn
     }
   }
   starts.push_back(Composition(n, 1.0 / n));
-  for (const double share : {0.02, 0.5, 0.95}) {
-    starts.push_back(moved(reference.x, softness.direction, 1.0, share));
-    starts.push_back(moved(reference.x, softness.direction, -1.0, share));
-  }
   Composition ideal(n);
   for (int i = 0; i < n; ++i) {
     ideal[i] = std::exp(std::clamp(reference.d[i], -kLargestExponent, kLargestExponent));
   }
   starts.push_back(normalised(ideal));
-  for (const Composition& given : options.starts) {
-    expects(given.size() >= n, "stability: a starting point has the wrong size");
-    Composition start(n);
-    for (int a = 0; a < n; ++a) {
-      start[a] = given[members[a]];
-    }
-    starts.push_back(normalised(start));
-  }
+  starts.push_back(moved(reference.x, softness.direction, 1.0, 0.95));
+  starts.push_back(moved(reference.x, softness.direction, -1.0, 0.95));
   std::mt19937_64 random(options.seed);
   const int seeded = n <= 3 ? 3 : 4 * n;
   for (int k = 0; k < seeded; ++k) {
@@ -272,17 +306,15 @@ std::vector<Composition> starting_points(const Reference& reference, const Softn
   return starts;
 }
 
-struct SearchResult {
+/// What the descents found so far.
+struct Findings {
   double tpd = 0.0;
   Composition w;           ///< of the lowest tpd; x when that is the trivial solution
   bool conclusive = true;  ///< every start converged, none to a tpd too close to zero away from x
 };
 
-SearchResult search(const Mixture& face, double temperature_K, const Reference& reference,
-                    const std::vector<Composition>& starts) {
-  const TangentPlaneDescent descent(face, temperature_K, reference);
-  SearchResult best;
-  best.w = reference.x;
+void search(const TangentPlaneDescent& descent, const Reference& reference, const std::vector<Composition>& starts,
+            Findings& best) {
   for (const Composition& start : starts) {
     const Descent end = descent.run(start);
     double distance = 0.0;
@@ -297,84 +329,57 @@ SearchResult search(const Mixture& face, double temperature_K, const Reference& 
       best.w = end.w;
     }
   }
-  return best;
 }
 
-Members present(const Composition& x) {
-  Members members;
+/// The test of a liquid in which every component is present.
+StabilityResult test_face(const Mixture& face, double temperature_K, const Composition& x, const Members& members,
+                          const StabilityOptions& options) {
+  Reference reference;
+  reference.x = x;
+  reference.d = face.ln_gamma(temperature_K, x);
   for (int i = 0; i < x.size(); ++i) {
-    expects(x[i] >= 0.0, "stability: negative mole fraction");
-    if (x[i] > 0.0) {
-      members.push_back(i);
-    }
+    reference.d[i] += std::log(x[i]);
   }
-  return members;
-}
-
-Composition in_face(const Composition& x, const Members& members) {
-  Composition result(members.size());
-  for (int a = 0; a < members.size(); ++a) {
-    result[a] = x[members[a]];
+  const Softness softness = softest_in_face(face, temperature_K, x);
+  const TangentPlaneDescent descent(face, temperature_K, reference);
+  Findings found;
+  found.w = x;
+  search(descent, reference, first_starts(reference, softness, options, members), found);
+  const bool provable = x.size() <= std::min(options.proof_up_to, kMostProvedComponents);
+  if (found.tpd >= -kTpdNoise && provable && prove_stable(face, temperature_K, x, options.max_boxes).proved) {
+    return {Stability::stable, true, 0.0, x};
   }
-  return result;
-}
-
-Composition in_mixture(const Composition& x, const Members& members, int size) {
-  Composition result(size, 0.0);
-  for (int a = 0; a < members.size(); ++a) {
-    result[members[a]] = x[a];
-  }
-  return result;
-}
-
-StabilityResult conclude(const Mixture& face, double temperature_K, const Reference& reference,
-                         const Softness& softness, const SearchResult& found, const StabilityOptions& options) {
-  StabilityResult result;
-  result.tpd_min = found.tpd;
-  result.incipient = found.w;
+  search(descent, reference, further_starts(reference, softness, options), found);
+  StabilityResult result{Stability::not_concluded, false, found.tpd, found.w};
   if (found.tpd < -kTpdNoise) {
-    result.proved = proves_unstable(face, temperature_K, reference.x, found.w);
+    result.proved = proves_unstable(face, temperature_K, x, found.w);
     result.outcome = result.proved ? Stability::unstable : Stability::not_concluded;
-    return result;
-  }
-  if (reference.x.size() <= std::min(options.proof_up_to, kMostProvedComponents)) {
-    result.proved = prove_stable(face, temperature_K, reference.x, options.max_boxes).proved;
-  }
-  const bool searched = found.conclusive && softness.curvature > kSoftCurvature;
-  result.outcome = result.proved || searched ? Stability::stable : Stability::not_concluded;
-  if (result.proved) {  // what lies within rounding of zero is zero
-    result.tpd_min = 0.0;
-    result.incipient = reference.x;
+  } else if (found.conclusive && softness.curvature > kSoftCurvature) {
+    result.outcome = Stability::stable;
   }
   return result;
 }
 
 }  // namespace
 
+bool never_splits(const Mixture& mixture) {
+  const bool convex =
+      std::holds_alternative<Ideal>(mixture.activity()) || std::holds_alternative<Wilson>(mixture.activity());
+  return convex && !mixture.corrected();
+}
+
 StabilityResult test_stability(const Mixture& mixture, double temperature_K, const Composition& x,
                                const StabilityOptions& options) {
   expects(x.size() == mixture.size(), "stability: composition and mixture differ in size");
   const Members members = present(x);
   expects(!members.empty(), "stability: empty liquid");
-  if (members.size() == 1) {
-    return {Stability::stable, true, 0.0, x};
+  const Composition within = normalised(in_face(x, members));
+  if (members.size() == 1 || never_splits(mixture)) {
+    return {Stability::stable, true, 0.0, in_mixture(within, members, mixture.size())};
   }
-  const bool whole = members.size() == mixture.size();
-  std::optional<Mixture> part;
-  if (!whole) {
-    part = mixture.face(members);
-  }
-  const Mixture& face = whole ? mixture : *part;
-  Reference reference;
-  reference.x = normalised(in_face(x, members));
-  reference.d = face.ln_gamma(temperature_K, reference.x);
-  for (int a = 0; a < members.size(); ++a) {
-    reference.d[a] += std::log(reference.x[a]);
-  }
-  const Softness softness = softest_in_face(face, temperature_K, reference.x);
-  const std::vector<Composition> starts = starting_points(reference, softness, options, members);
-  const SearchResult found = search(face, temperature_K, reference, starts);
-  StabilityResult result = conclude(face, temperature_K, reference, softness, found, options);
+  StabilityResult result = members.size() == mixture.size()
+                               ? test_face(mixture, temperature_K, within, members, options)
+                               : test_face(mixture.face(members), temperature_K, within, members, options);
   result.incipient = in_mixture(result.incipient, members, mixture.size());
   return result;
 }

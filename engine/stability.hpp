@@ -8,8 +8,9 @@
 /// face.
 ///
 /// Method    search: successive substitution and Newton (in 2 sqrt(w)) from pure phases, midpoints, the ideal
-///           reply, the softest direction at x, seeded points. Proof (engine/stability_proof.hpp): interval
-///           branch and prune up to `proof_up_to` components.
+///           reply, the softest direction at x, given and seeded points. Proof (engine/stability_proof.hpp): interval
+///           branch and prune up to `proof_up_to` components, after the first starts found nothing. Models
+///           that never split need neither.
 /// Claims    unstable, proved      interval evaluation of tpd at `incipient` lies below zero: certain for this model.
 ///           stable, proved        no liquid has tpd < 0: certain for this model and the stored parameters, T and x.
 ///           stable, not proved    every start converged, none to tpd < kTpdNoise, x well inside the region of local
@@ -37,8 +38,8 @@ inline constexpr double kTpdNoise = 1e-9;
 inline constexpr double kSoftCurvature = 1e-4;
 
 struct StabilityOptions {
-  int proof_up_to = 3;               ///< components of x; more than four are never proved
-  std::int64_t max_boxes = 200'000;  ///< budget of the proof
+  int proof_up_to = 3;              ///< components of x; more than four are never proved
+  std::int64_t max_boxes = 50'000;  ///< budget of the proof
   std::uint64_t seed = 1;
   std::vector<Composition> starts;  ///< further starting points, all components of the mixture
 };
@@ -46,6 +47,10 @@ struct StabilityOptions {
 /// `x` on the closed simplex (rescaled to sum 1), all components of the mixture.
 [[nodiscard]] StabilityResult test_stability(const Mixture& mixture, double temperature_K, const Composition& x,
                                              const StabilityOptions& options = {});
+
+/// True for models whose liquids never split at any composition: ideal, and Wilson, whose free energy of mixing is
+/// sum_i x_i ln(x_i/L_i) with L_i = sum_j Lambda_ij x_j linear and positive: every term is convex in (x_i, L_i).
+[[nodiscard]] bool never_splits(const Mixture& mixture);
 
 /// tpd(w) in doubles; w and x of the mixture's size, w zero where x is zero.
 [[nodiscard]] double tangent_plane_distance(const Mixture& mixture, double temperature_K, const Composition& x,

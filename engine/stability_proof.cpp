@@ -7,6 +7,7 @@
 #include <vector>
 
 #include "models/interval.hpp"
+#include "models/means.hpp"
 
 namespace stillshed {
 namespace {
@@ -261,9 +262,7 @@ class TangentPlaneProof {
     if (bounded_below(box, c, centre.tpd, centre.ln_w_minus_d, gradient.value)) {
       return true;
     }
-    const Vec<Interval> nothing(box.size(), Interval(0.0));
-    return positive_definite(least_curvature(box, gradient.d_dx)) &&
-           bounded_below(box, c, centre.tpd, centre.s, nothing);
+    return supported_by_plane(box, c, centre.s, least_curvature(box, gradient.d_dx));
   }
 
   /// Rule 1.
@@ -277,27 +276,35 @@ class TangentPlaneProof {
     return false;
   }
 
-  /// tpd(c) + sum_i (w_i - c_i) (first_i + second_i) >= 0 for all w of the box. The w_i - c_i add up to zero, so any
-  /// common number may be taken off the factors; the middle of their range makes the products small.
+  /// Rule 2: tpd(c) + sum_i (w_i - c_i) (point_i + range_i) >= 0 for all w of the box on the simplex. The part with the
+  /// middle of each range is linear in w and bounded exactly; the rest by |w_i - c_i| times half the width.
   [[nodiscard]] static bool bounded_below(const Point& box, const Point& c, const Interval& tpd,
-                                          const Vec<Interval>& first, const Vec<Interval>& second) {
+                                          const Vec<Interval>& point, const Vec<Interval>& range) {
     Vec<Interval> factor(box.size());
-    double low = kInfinity;
-    double high = -kInfinity;
+    Interval rest = tpd;
     for (int i = 0; i < box.size(); ++i) {
-      factor[i] = first[i] + second[i];
-      if (!factor[i].is_bounded()) {
-        return false;
-      }
-      low = std::min(low, factor[i].mid());
-      high = std::max(high, factor[i].mid());
+      const Interval middle(range[i].mid());
+      factor[i] = point[i] + middle;
+      rest += (box[i] - c[i]) * (range[i] - middle) - c[i] * factor[i];
     }
-    const double common = 0.5 * (low + high);
-    Interval sum = tpd;
-    for (int i = 0; i < box.size(); ++i) {
-      sum += (box[i] - c[i]) * (factor[i] - common);
+    return (simplex_sum(box.begin(), factor.begin(), box.size()) + rest).lower() >= 0.0;
+  }
+
+  /// Rule 5: tpd(w) >= sum_i w_i s_i(c) + 1/2 delta.R.delta, delta = w - c. If the plane stays above L > 0 on the box,
+  /// then it is enough that R + diag(2 L/(k r_a^2)) is positive definite, k rows, |delta_a| <= r_a: the addition is
+  /// worth at most L.
+  [[nodiscard]] static bool supported_by_plane(const Point& box, const Point& c, const Vec<Interval>& s, Curvature R) {
+    const double lowest = simplex_sum(box.begin(), s.begin(), box.size()).lower();
+    if (!(lowest >= 0.0)) {
+      return false;
     }
-    return sum.lower() >= 0.0;
+    for (std::size_t a = 0; a < static_cast<std::size_t>(R.size); ++a) {
+      const int i = R.index[a];
+      const Interval reach((box[i] - c[i]).magnitude());
+      const Interval addition = (2.0 * Interval(lowest)) / (square(reach) * static_cast<double>(R.size));
+      R.entry[a][a] += addition.lower();
+    }
+    return positive_definite(R);
   }
 
   /// Halves the widest side; false when it cannot be halved any more.
@@ -331,6 +338,9 @@ class TangentPlaneProof {
 
 StabilityProof prove_stable(const Mixture& face, double temperature_K, const Composition& x, std::int64_t max_boxes) {
   expects(x.size() == face.size() && x.size() <= kMostProvedComponents, "stability proof: unsuitable size");
+  for (const double fraction : x) {
+    expects(fraction > 0.0, "stability proof: a component is absent");
+  }
   return TangentPlaneProof(face, temperature_K, x).run(max_boxes);
 }
 

@@ -3,11 +3,13 @@
 /// The simplex is covered by boxes. A box is dismissed when one of these holds for all its points on the simplex:
 ///   1  the s_i (engine/stability.hpp) cannot be equal, or cannot be equal and negative: no stationary point with
 ///      tpd < 0. The smallest tpd lies in the open simplex, because at a face ln w_i -> -infinity pulls it inward;
-///   2  tpd >= 0 from a mean-value form: tpd(c) + sum_i (s_i(box) - s_p(box)) (w_i - c_i) (Gibbs-Duhem);
+///   2  tpd >= 0 from a mean-value form of the excess part (Gibbs-Duhem) and Gibbs' inequality for the ideal part:
+///      tpd(c) + sum_i (w_i - c_i) (ln c_i - d_i + ln g_i(box)), c the midpoint;
 ///   3  the curvature of tpd is negative in one direction throughout: no minimum inside;
-///   4  the curvature is positive definite on the hull of the box and x: tpd is convex there, x is stationary
+///   4  the box lies in a box around x where the curvature is positive definite: tpd is convex there, x is stationary
 ///      with tpd = 0, so tpd >= 0;
-///   5  the curvature is positive definite on the box and the supporting plane at its midpoint stays above zero.
+///   5  tpd >= 0 from the supporting plane at c and a lower bound of the curvature R over the box:
+///      sum_i w_i s_i(c) + (w - c).R.(w - c)/2.
 /// Otherwise it is halved. An unbounded or NaN enclosure dismisses nothing.
 ///
 /// Claims    `proved`: tpd >= 0 for every composition of the components of x, for the stored parameters, this model and

@@ -41,6 +41,8 @@ class Mixture {
   [[nodiscard]] const std::vector<MixtureComponent>& components() const { return components_; }
   [[nodiscard]] const MixtureComponent& component(int i) const { return components_[static_cast<std::size_t>(i)]; }
   [[nodiscard]] const ActivityModel& activity() const { return activity_; }
+  /// True when a Redlich-Kister correction is added to the model.
+  [[nodiscard]] bool corrected() const { return correction_.has_value(); }
 
   /// ln gamma of every component. x on the closed simplex, zeros included; sum(x) = 1 is assumed, not enforced.
   template <class S>

@@ -159,6 +159,31 @@ TEST(Stability, traces_do_not_disturb_the_answer) {
   EXPECT_TRUE(result.proved);
 }
 
+TEST(Stability, convex_models_need_no_search) {
+  PairParameters lambda(3);
+  lambda.a = square_matrix({{0.0, -2.0, -1.5}, {-2.5, 0.0, -2.0}, {-1.0, -3.0, 0.0}});
+  const std::vector<double> boiling_points(3, 350.0);
+  const Mixture wilson = simple_mixture(boiling_points, Wilson(lambda));
+  EXPECT_TRUE(never_splits(wilson));
+  const StabilityResult result = test_stability(wilson, kTemperature_K, kMiddle);
+  EXPECT_EQ(result.outcome, Stability::stable);
+  EXPECT_TRUE(result.proved);
+  // The theorem against the general proof, and on a grid.
+  for (double a = 0.05; a < 1.0; a += 0.1) {
+    for (double b = 0.05; a + b < 1.0; b += 0.1) {
+      const Composition x{a, b, 1.0 - a - b};
+      EXPECT_GT(softest_direction(wilson, kTemperature_K, x).curvature, 0.0);
+      EXPECT_GE(tangent_plane_distance(wilson, kTemperature_K, kMiddle, x), -1e-14);
+    }
+  }
+  EXPECT_FALSE(never_splits(symmetric_mixture(3, 0.1)));
+  // A correction on top is no longer convex: here it splits.
+  std::vector<MixtureComponent> components = wilson.components();
+  const Mixture corrected(components, Wilson(lambda), RedlichKister(3, {{0, 1, {6.0}}}));
+  EXPECT_FALSE(never_splits(corrected));
+  EXPECT_EQ(test_stability(corrected, kTemperature_K, {0.5, 0.45, 0.05}).outcome, Stability::unstable);
+}
+
 TEST(Stability, mixtures_beyond_the_proof_say_so) {
   StabilityOptions options;
   options.proof_up_to = 2;
