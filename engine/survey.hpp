@@ -91,7 +91,7 @@ struct SurveyOptions {
   int prove_up_to = 0;
   std::int64_t max_boxes = 2'000'000;  ///< budget of one face
   double cluster_width = 3e-8;  ///< a box narrower than this that no test settles is a cluster. Allowed: 1e-12 to 1e-3
-  int stability_proof_up_to = 3;  ///< members; larger ones are searched only
+  int stability_proof_up_to = 4;  ///< members; larger ones are searched only
   std::uint64_t seed = 1;
   std::stop_token stop;
   ProgressFn progress;

@@ -3,7 +3,11 @@
 #include <gtest/gtest.h>
 
 #include <cmath>
+#include <cstdlib>
+#include <numeric>
+#include <random>
 
+#include "engine/stability.hpp"
 #include "tests/support/simple_mixtures.hpp"
 
 namespace stillshed {
@@ -47,6 +51,44 @@ TEST(StabilityProof, closes_near_the_turning_points) {
   EXPECT_TRUE(prove_stable(symmetric_mixture(3, 4.0 * std::log(2.0) - 1e-5), kTemperature_K,
                            {1.0 / 3.0, 1.0 / 3.0, 1.0 / 3.0}, 50000)
                   .proved);
+}
+
+TEST(StabilityProof, no_proof_where_a_witness_exists) {
+  // Random NRTL liquids of two to four components; where a lower liquid is certain, the proof must not close.
+  std::mt19937_64 random(77);
+  std::uniform_real_distribution<double> tau(-1.0, 3.5);
+  std::uniform_real_distribution<double> share(0.01, 1.0);
+  const int cases = std::getenv("STILLSHED_FULL") != nullptr ? 5000 : 200;
+  int unstable = 0;
+  int proved = 0;
+  for (int k = 0; k < cases; ++k) {
+    const int n = 2 + k % 3;
+    NrtlParameters parameters(n);
+    Composition x(n);
+    for (int i = 0; i < n; ++i) {
+      x[i] = share(random);
+      for (int j = 0; j < n; ++j) {
+        parameters.tau.a(i, j) = i == j ? 0.0 : tau(random);
+        parameters.alpha(i, j) = i == j ? 0.0 : 0.3;
+      }
+    }
+    const double sum = std::accumulate(x.begin(), x.end(), 0.0);
+    for (double& value : x) {
+      value /= sum;
+    }
+    const Mixture mixture = simple_mixture(std::vector<double>(static_cast<std::size_t>(n), 350.0), Nrtl(parameters));
+    StabilityOptions search_only;
+    search_only.proof_up_to = 0;
+    const StabilityResult searched = test_stability(mixture, kTemperature_K, x, search_only);
+    const bool closed = prove_stable(mixture, kTemperature_K, x, 3000).proved;
+    if (searched.outcome == Stability::unstable) {
+      ++unstable;
+      EXPECT_FALSE(closed) << "case " << k << ", tpd " << searched.tpd_min;
+    }
+    proved += closed ? 1 : 0;
+  }
+  EXPECT_GT(unstable, cases / 10);
+  EXPECT_GT(proved, cases / 4);
 }
 
 TEST(StabilityProof, budget_is_respected) {
