@@ -63,6 +63,16 @@ std::string stability_words(const StabilityResult& result) {
   return "not concluded";
 }
 
+const char* boiling_words(Boiling boiling) {
+  switch (boiling) {
+    case Boiling::minimum: return "minimum boiling";
+    case Boiling::maximum: return "maximum boiling";
+    case Boiling::saddle: return "neither minimum nor maximum";
+    case Boiling::inflection: return "tangent";
+  }
+  return "";
+}
+
 std::string azeotrope_table(const Answer& answer) {
   HtmlTable table("Azeotropes of the mixture and of all its sub-mixtures");
   table.column("Point");
@@ -78,7 +88,7 @@ std::string azeotrope_table(const Answer& answer) {
     table.row({element("b", short_id(azeotrope.point.id)) + "<br/>" + escape_markup(member_names(answer.mixture, azeotrope.point.members)),
                celsius(azeotrope.point.temperature_K), mole_percent_lines(answer, azeotrope.point.x),
                mass_percent_lines(answer, azeotrope.point.x),
-               escape_markup(std::string(azeotrope.cluster ? "degenerate, " : "") + to_string(azeotrope.boiling)) + " boiling<br/>" +
+               std::string(azeotrope.cluster ? "not told apart, " : "") + boiling_words(azeotrope.boiling) + "<br/>" +
                    node_words(azeotrope.point.node) + "<br/>" + stability_words(azeotrope.stability),
                measured_cells(answer, k), "<abbr title=\"" + evidence_words(mark) + "\">" + mark + "</abbr>"});
   }

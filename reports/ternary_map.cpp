@@ -322,10 +322,12 @@ class MapDrawing {
         });
       }
     }
-    legend_.add("residue curve, to higher temperature", [](Svg& svg, Point at) {
-      svg.line(at - Point{17, 0}, at + Point{17, 0}, line_style(ink::kCurve, 1.1));
-      draw_arrow(svg, at, {1.0, 0.0}, 9.0, ink::kCurve);
-    });
+    if ((chart() != nullptr && !chart()->curves.empty()) || answer_.position.has_value()) {
+      legend_.add("residue curve, to higher temperature", [](Svg& svg, Point at) {
+        svg.line(at - Point{17, 0}, at + Point{17, 0}, line_style(ink::kCurve, 1.1));
+        draw_arrow(svg, at, {1.0, 0.0}, 9.0, ink::kCurve);
+      });
+    }
     if (!answer_.feed.empty()) {
       legend_.add("feed", [](Svg& svg, Point at) { draw_star(svg, at); });
     }
