@@ -23,9 +23,11 @@ std::string text_style(double size, const char* colour, const char* extra = "") 
   return "font-size=\"" + fixed(size, 0) + "\" fill=\"" + colour + "\" " + extra;
 }
 std::string line_style(const char* colour, double width, const char* extra = "") {
-  return std::string("stroke=\"") + colour + "\" stroke-width=\"" + fixed(width, 1) + "\" stroke-linejoin=\"round\" " + extra;
+  return std::string("stroke=\"") + colour + "\" stroke-width=\"" + fixed(width, 1) + "\" stroke-linejoin=\"round\" " +
+         extra;
 }
-constexpr const char* kRim = "paint-order=\"stroke\" stroke=\"#ffffff\" stroke-width=\"3\" stroke-linejoin=\"round\" font-weight=\"600\"";
+constexpr const char* kRim =
+    "paint-order=\"stroke\" stroke=\"#ffffff\" stroke-width=\"3\" stroke-linejoin=\"round\" font-weight=\"600\"";
 
 /// A square plot with linear axes; x always runs from 0 to 1.
 class Frame {
@@ -59,7 +61,8 @@ class Frame {
       svg_.line(foot, foot - Point{6, 0}, line_style(ink::kText, 1.2));
       svg_.text(foot + Point{-9, 4}, fixed(tick, decimals), text_style(12, ink::kSoft), Anchor::end);
     }
-    svg_.text({kLeft + 0.5 * kPlotWidth, kTop + kPlotHeight + 42.0}, x_name, text_style(13, ink::kText), Anchor::middle);
+    svg_.text({kLeft + 0.5 * kPlotWidth, kTop + kPlotHeight + 42.0}, x_name, text_style(13, ink::kText),
+              Anchor::middle);
     svg_.text({22.0, kTop + 0.5 * kPlotHeight}, y_name, text_style(13, ink::kText), Anchor::middle, -90.0);
   }
 
@@ -80,11 +83,14 @@ class Frame {
 void heading(Svg& svg, const Answer& answer, const std::string& title) {
   svg.text({kLeft + 0.5 * kPlotWidth, 24}, title,
            text_style(fitting_size(title, 16, kWidth - 20), ink::kText, "font-weight=\"600\""), Anchor::middle);
-  svg.text({kLeft + 0.5 * kPlotWidth, 44}, "mole fractions · " + pressure_text(answer.input.pressure_Pa) + " · " + answer.model_kind,
+  svg.text({kLeft + 0.5 * kPlotWidth, 44},
+           "mole fractions · " + pressure_text(answer.input.pressure_Pa) + " · " + answer.model_kind,
            text_style(13, ink::kSoft), Anchor::middle);
 }
 
-const std::string& name(const Answer& answer, int i) { return answer.mixture.component(i).id; }
+const std::string& name(const Answer& answer, int i) {
+  return answer.mixture.component(i).id;
+}
 
 /// Measured points that can be drawn: given with a composition, near the pressure of the plot.
 std::vector<MeasuredMatch> measured_points(const Answer& answer) {
@@ -105,7 +111,8 @@ std::vector<MeasuredMatch> measured_points(const Answer& answer) {
 }
 
 std::string words(const Answer& answer) {
-  std::string text = name(answer, 0) + " and " + name(answer, 1) + " at " + pressure_text(answer.input.pressure_Pa) + ". ";
+  std::string text =
+      name(answer, 0) + " and " + name(answer, 1) + " at " + pressure_text(answer.input.pressure_Pa) + ". ";
   if (answer.survey->azeotropes.empty()) {
     text += "No azeotrope computed.";
   }
@@ -152,7 +159,8 @@ TickSteps tick_steps(double low, double high, int wanted) {
 }
 
 std::string temperature_composition_svg(const Answer& answer, const BinaryPhases& phases) {
-  expects(answer.mixture.size() == 2 && answer.survey.has_value() && !phases.rows.empty(), "T-x-y: two components needed");
+  expects(answer.mixture.size() == 2 && answer.survey.has_value() && !phases.rows.empty(),
+          "T-x-y: two components needed");
   const std::vector<MeasuredMatch> measured = measured_points(answer);
   double low = phases.rows.front().temperature_K;
   double high = low;
@@ -171,7 +179,9 @@ std::string temperature_composition_svg(const Answer& answer, const BinaryPhases
   high += margin;
 
   Legend legend;
-  legend.add("liquid at its bubble point", [](Svg& s, Point p) { s.line(p - Point{17, 0}, p + Point{17, 0}, line_style(ink::kText, 2.2)); });
+  legend.add("liquid at its bubble point", [](Svg& s, Point p) {
+    s.line(p - Point{17, 0}, p + Point{17, 0}, line_style(ink::kText, 2.2));
+  });
   legend.add("vapour in equilibrium", [](Svg& s, Point p) {
     s.line(p - Point{17, 0}, p + Point{17, 0}, line_style(ink::kBoundary, 2.2, "stroke-dasharray=\"7 4\""));
   });
@@ -232,10 +242,13 @@ std::string temperature_composition_svg(const Answer& answer, const BinaryPhases
 }
 
 std::string vapour_liquid_svg(const Answer& answer, const BinaryPhases& phases) {
-  expects(answer.mixture.size() == 2 && answer.survey.has_value() && !phases.rows.empty(), "x-y: two components needed");
+  expects(answer.mixture.size() == 2 && answer.survey.has_value() && !phases.rows.empty(),
+          "x-y: two components needed");
   const std::vector<MeasuredMatch> measured = measured_points(answer);
   Legend legend;
-  legend.add("equilibrium", [](Svg& s, Point p) { s.line(p - Point{17, 0}, p + Point{17, 0}, line_style(ink::kText, 2.2)); });
+  legend.add("equilibrium", [](Svg& s, Point p) {
+    s.line(p - Point{17, 0}, p + Point{17, 0}, line_style(ink::kText, 2.2));
+  });
   legend.add("vapour like the liquid", [](Svg& s, Point p) {
     s.line(p - Point{17, 0}, p + Point{17, 0}, line_style(ink::kSoft, 1.2, "stroke-dasharray=\"3 3\""));
   });
@@ -250,7 +263,8 @@ std::string vapour_liquid_svg(const Answer& answer, const BinaryPhases& phases) 
   Svg svg(kWidth, kLegendTop + legend.height(2) + 8.0, "xy", title, words(answer));
   heading(svg, answer, title);
   Frame frame(svg, 0.0, 1.0);
-  frame.axes(name(answer, 0) + " in the liquid, mol%", name(answer, 0) + " in the vapour, mol%", {0.0, 20.0}, 100.0, 0.0);
+  frame.axes(name(answer, 0) + " in the liquid, mol%", name(answer, 0) + " in the vapour, mol%", {0.0, 20.0}, 100.0,
+             0.0);
   frame.curve({{0.0, 0.0}, {1.0, 1.0}}, line_style(ink::kSoft, 1.2, "stroke-dasharray=\"3 3\""));
   std::vector<Point> equilibrium;
   for (const BinaryPhases::Row& row : phases.rows) {

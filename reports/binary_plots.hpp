@@ -14,8 +14,8 @@ namespace stillshed {
 /// Bubble points from pure second component (x = 0) to pure first component (x = 1).
 struct BinaryPhases {
   struct Row {
-    double x = 0.0;              ///< liquid mole fraction of the first component
-    double y = 0.0;              ///< vapour in equilibrium with it
+    double x = 0.0;  ///< liquid mole fraction of the first component
+    double y = 0.0;  ///< vapour in equilibrium with it
     double temperature_K = 0.0;
   };
   std::vector<Row> rows;

@@ -22,7 +22,9 @@ int rank(Evidence evidence) {
   return 4;
 }
 
-bool contains(const Members& members, int i) { return std::find(members.begin(), members.end(), i) != members.end(); }
+bool contains(const Members& members, int i) {
+  return std::find(members.begin(), members.end(), i) != members.end();
+}
 
 }  // namespace
 
@@ -88,8 +90,8 @@ std::string reading_words(const Answer& answer, const std::string& reading) {
   if (std::sscanf(reading.c_str(), "sequences[%zu].streams[%zu]", &first, &second) == 2 && answer.reach.has_value() &&
       first < answer.reach->sequences.size() && second < answer.reach->sequences[first].streams.size()) {
     const Sequence::Stream& stream = answer.reach->sequences[first].streams[second];
-    return "sequence " + std::to_string(first + 1) + ", " + (stream.distillate ? "distillate" : "bottoms") + " of column " +
-           std::to_string(stream.column + 1);
+    return "sequence " + std::to_string(first + 1) + ", " + (stream.distillate ? "distillate" : "bottoms") +
+           " of column " + std::to_string(stream.column + 1);
   }
   return reading;
 }
@@ -137,7 +139,8 @@ std::optional<BestStream> best_stream(const Sequence& sequence, const Compositio
     const Sequence::Stream& stream = sequence.streams[k];
     const double recovery = stream.share * stream.x[component] / feed[component];
     const double purity = stream.x[component];
-    if (purity > purest + kSamePurity || (best.has_value() && purity > purest - kSamePurity && recovery > best->recovery)) {
+    if (purity > purest + kSamePurity ||
+        (best.has_value() && purity > purest - kSamePurity && recovery > best->recovery)) {
       purest = purity;
       best = BestStream{k, recovery};
     }

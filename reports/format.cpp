@@ -19,7 +19,9 @@ std::string print(const char* format, int digits, double value) {
   return buffer.data();
 }
 
-bool is_continuation(char c) { return (static_cast<unsigned char>(c) & 0xC0U) == 0x80U; }
+bool is_continuation(char c) {
+  return (static_cast<unsigned char>(c) & 0xC0U) == 0x80U;
+}
 
 /// Byte length of the first `columns` code points.
 std::size_t prefix_bytes(std::string_view text, int columns) {
@@ -58,11 +60,17 @@ std::string significant(double value, int digits) {
   return fixed(value, std::max(0, digits - 1 - static_cast<int>(magnitude)));
 }
 
-std::string celsius(double temperature_K, int decimals) { return fixed(temperature_K - 273.15, decimals); }
+std::string celsius(double temperature_K, int decimals) {
+  return fixed(temperature_K - 273.15, decimals);
+}
 
-std::string pressure_text(double pressure_Pa) { return significant(pressure_Pa / 1e5, 4) + " bar"; }
+std::string pressure_text(double pressure_Pa) {
+  return significant(pressure_Pa / 1e5, 4) + " bar";
+}
 
-std::string kilogram_text(double kg) { return significant(kg, 3) + " kg"; }
+std::string kilogram_text(double kg) {
+  return significant(kg, 3) + " kg";
+}
 
 std::string share_percent(double fraction) {
   const double percent = 100.0 * fraction;
@@ -109,7 +117,9 @@ const char* unit_of(const ProductTest& test) {
   return test.basis == Basis::mass ? " wt%" : " mol%";
 }
 
-std::string plain_percent(double fraction) { return print("%.*g", 10, 100.0 * fraction); }
+std::string plain_percent(double fraction) {
+  return print("%.*g", 10, 100.0 * fraction);
+}
 
 /// One digit more than the specification shows, two at least.
 int digits_against(double value) {

@@ -12,7 +12,9 @@ namespace stillshed {
 namespace {
 
 /// Tiers C and D are not shown as facts.
-bool shown(const MeasuredMatch& match) { return match.tier == 'A' || match.tier == 'B'; }
+bool shown(const MeasuredMatch& match) {
+  return match.tier == 'A' || match.tier == 'B';
+}
 
 std::string measured_cell(const Answer& answer, const MeasuredMatch& match) {
   std::string text;
@@ -85,7 +87,8 @@ std::string azeotrope_table(const Answer& answer) {
   for (std::size_t k = 0; k < answer.survey->azeotropes.size(); ++k) {
     const Azeotrope& azeotrope = answer.survey->azeotropes[k];
     const std::string mark = azeotrope_evidence(answer, k);
-    table.row({element("b", short_id(azeotrope.point.id)) + "<br/>" + escape_markup(member_names(answer.mixture, azeotrope.point.members)),
+    table.row({element("b", short_id(azeotrope.point.id)) + "<br/>" +
+                   escape_markup(member_names(answer.mixture, azeotrope.point.members)),
                celsius(azeotrope.point.temperature_K), mole_percent_lines(answer, azeotrope.point.x),
                mass_percent_lines(answer, azeotrope.point.x),
                std::string(azeotrope.cluster ? "not told apart, " : "") + boiling_words(azeotrope.boiling) + "<br/>" +
@@ -143,7 +146,8 @@ std::string rejected_table(const Answer& answer) {
                mole_percent_lines(answer, root.x), significant(root.stability.tpd_min, 3)});
   }
   return table.markup() +
-         "<p>Where a liquid splits, the azeotropes of two liquids are not searched yet: what depends on them is NO CALL.</p>\n";
+         "<p>Where a liquid splits, the azeotropes of two liquids are not searched yet: what depends on them is NO "
+         "CALL.</p>\n";
 }
 
 std::string region_table(const Answer& answer) {
@@ -160,7 +164,8 @@ std::string region_table(const Answer& answer) {
       sides += (sides.empty() ? "" : ", ") + id;
     }
     const std::string share = region.area >= 1.0 - 1e-9 ? "the whole map" : share_percent(region.area);
-    table.row({escape_markup(region.id), escape_markup(chart.fixed_points[static_cast<std::size_t>(region.unstable_node)].id),
+    table.row({escape_markup(region.id),
+               escape_markup(chart.fixed_points[static_cast<std::size_t>(region.unstable_node)].id),
                escape_markup(chart.fixed_points[static_cast<std::size_t>(region.stable_node)].id), share,
                sides.empty() ? "none" : escape_markup(sides)});
   }
@@ -172,15 +177,17 @@ std::string region_table(const Answer& answer) {
   boundaries.column("Confines");
   boundaries.column("Position error, mol%", true);
   for (const Boundary& boundary : chart.boundaries) {
-    boundaries.row({escape_markup(boundary.id), escape_markup(chart.fixed_points[static_cast<std::size_t>(boundary.from)].id),
-                    escape_markup(chart.fixed_points[static_cast<std::size_t>(boundary.to)].id), to_string(boundary.confines),
-                    significant(100.0 * boundary.error, 2)});
+    boundaries.row({escape_markup(boundary.id),
+                    escape_markup(chart.fixed_points[static_cast<std::size_t>(boundary.from)].id),
+                    escape_markup(chart.fixed_points[static_cast<std::size_t>(boundary.to)].id),
+                    to_string(boundary.confines), significant(100.0 * boundary.error, 2)});
   }
   return text + (boundaries.empty() ? "<p>No distillation boundary.</p>\n" : boundaries.markup());
 }
 
 std::string figure(const std::string& svg, const char* css = "") {
-  return std::string("<figure") + (*css != '\0' ? std::string(" class=\"") + css + "\"" : "") + ">\n" + svg + "</figure>\n";
+  return std::string("<figure") + (*css != '\0' ? std::string(" class=\"") + css + "\"" : "") + ">\n" + svg +
+         "</figure>\n";
 }
 
 }  // namespace

@@ -56,7 +56,8 @@ std::string percent_lines(const Answer& answer, const Composition& x, const std:
   for (int i = 0; i < x.size(); ++i) {
     if (x[i] > 0.0) {
       lines += lines.empty() ? "" : "<br/>";
-      lines += escape_markup(answer.mixture.component(i).id) + "&#160;" + escape_markup(share_percent(fractions[static_cast<std::size_t>(i)]));
+      lines += escape_markup(answer.mixture.component(i).id) + "&#160;" +
+               escape_markup(share_percent(fractions[static_cast<std::size_t>(i)]));
     }
   }
   return lines;
@@ -122,7 +123,9 @@ namespace {
 constexpr double kGaugeLeft = 14.0;
 constexpr double kGaugeWidth = 600.0;
 
-double gauge_x(double purity) { return kGaugeLeft + kGaugeWidth * nines(purity) / 5.0; }
+double gauge_x(double purity) {
+  return kGaugeLeft + kGaugeWidth * nines(purity) / 5.0;
+}
 
 const TestOutcome* purity_test(const ProductOutcome& outcome) {
   for (const TestOutcome& item : outcome.tests) {
@@ -147,8 +150,8 @@ std::string purity_gauge(const Answer& answer, const ProductOutcome& outcome) {
   if (asked != nullptr) {
     words += ", asked " + significant(100.0 * asked->test.value, 6) + unit;
   }
-  Svg svg(kGaugeLeft + kGaugeWidth + 60.0, 58.0, "gauge-" + std::to_string(outcome.component), "How far " + name + " gets",
-          words + ".");
+  Svg svg(kGaugeLeft + kGaugeWidth + 60.0, 58.0, "gauge-" + std::to_string(outcome.component),
+          "How far " + name + " gets", words + ".");
   constexpr double kBar = 24.0;
   const std::string label = std::string("font-size=\"12\" fill=\"") + ink::kSoft + "\"";
   svg.rectangle({kGaugeLeft, kBar - 6}, kGaugeWidth, 12, "fill=\"#eef2f3\" stroke=\"#b8c4ca\" stroke-width=\"1\"");
@@ -160,7 +163,8 @@ std::string purity_gauge(const Answer& answer, const ProductOutcome& outcome) {
   for (int k = 0; k <= 5; ++k) {
     const double x = kGaugeLeft + kGaugeWidth * k / 5.0;
     svg.line({x, kBar + 6}, {x, kBar + 12}, std::string("stroke=\"") + ink::kSoft + "\"");
-    svg.text({x, kBar + 25}, std::string(ticks[k]) + (k == 5 ? unit : ""), label, k == 0 ? Anchor::start : Anchor::middle);
+    svg.text({x, kBar + 25}, std::string(ticks[k]) + (k == 5 ? unit : ""), label,
+             k == 0 ? Anchor::start : Anchor::middle);
   }
   if (limit >= 1.0 - 1e-5) {
     draw_arrow(svg, {kGaugeLeft + kGaugeWidth + 6, kBar}, {1.0, 0.0}, 14.0, ink::kCurve);

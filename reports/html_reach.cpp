@@ -48,13 +48,15 @@ std::string batch_table(const Answer& answer, const Batch& batch) {
   table.column("Meanwhile the pot moves");
   for (std::size_t c = 0; c < batch.cuts.size(); ++c) {
     const Cut& cut = batch.cuts[c];
-    table.row({std::to_string(c + 1), escape_markup(cut_name(answer, cut)), temperature_cell(cut), mole_percent_lines(answer, cut.average),
-               mass_percent_lines(answer, cut.average), escape_markup(share_percent(cut.share)),
-               kilogram_cell(answer, cut.average, cut.share), escape_markup(where_words(answer, cut.on))});
+    table.row({std::to_string(c + 1), escape_markup(cut_name(answer, cut)), temperature_cell(cut),
+               mole_percent_lines(answer, cut.average), mass_percent_lines(answer, cut.average),
+               escape_markup(share_percent(cut.share)), kilogram_cell(answer, cut.average, cut.share),
+               escape_markup(where_words(answer, cut.on))});
   }
   if (!batch.heel.empty() && batch.heel_share > 0.0) {
-    table.row({"heel", "stays in the vessel", "–", mole_percent_lines(answer, batch.heel), mass_percent_lines(answer, batch.heel),
-               escape_markup(share_percent(batch.heel_share)), kilogram_cell(answer, batch.heel, batch.heel_share), "–"});
+    table.row({"heel", "stays in the vessel", "–", mole_percent_lines(answer, batch.heel),
+               mass_percent_lines(answer, batch.heel), escape_markup(share_percent(batch.heel_share)),
+               kilogram_cell(answer, batch.heel, batch.heel_share), "–"});
   }
   std::string text = table.empty() ? "" : table.markup();
   if (!batch.message.empty()) {
@@ -66,7 +68,8 @@ std::string batch_table(const Answer& answer, const Batch& batch) {
 std::string stream_cell(const Answer& answer, const Composition& x, double share) {
   std::string text = mole_percent_lines(answer, x);
   const std::optional<double> kg = kilograms(answer, x, share);
-  text += "<br/><i>" + (share < 1.0 - 1e-12 ? escape_markup(share_percent(share)) + " mol% of the charge" : "the whole charge");
+  text += "<br/><i>" +
+          (share < 1.0 - 1e-12 ? escape_markup(share_percent(share)) + " mol% of the charge" : "the whole charge");
   if (kg.has_value()) {
     text += ", " + kilogram_text(*kg);
   }
@@ -86,12 +89,14 @@ std::string sequence_table(const Answer& answer, std::size_t k) {
     const Column& column = sequence.columns[c];
     std::string source = "the charge";
     if (column.parent.has_value()) {
-      source = std::string(column.parent_distillate ? "distillate" : "bottoms") + " of column " + std::to_string(*column.parent + 1);
+      source = std::string(column.parent_distillate ? "distillate" : "bottoms") + " of column " +
+               std::to_string(*column.parent + 1);
     }
     const double distillate = column.feed_to_charge * column.distillate_to_feed;
     table.row({std::to_string(c + 1), source, stream_cell(answer, column.feed, column.feed_to_charge),
                stream_cell(answer, column.distillate, distillate),
-               stream_cell(answer, column.bottoms, column.feed_to_charge - distillate), column.direct ? "direct" : "indirect"});
+               stream_cell(answer, column.bottoms, column.feed_to_charge - distillate),
+               column.direct ? "direct" : "indirect"});
   }
   return table.markup();
 }
@@ -134,7 +139,8 @@ std::vector<std::size_t> sequences_to_print(const Answer& answer, std::size_t mo
 
 std::string reach_section(const Answer& answer) {
   std::string text =
-      "<p>Every amount here is the limit for unlimited stages and reflux, without recycle and without hold-up in the column; a real "
+      "<p>Every amount here is the limit for unlimited stages and reflux, without recycle and without hold-up in the "
+      "column; a real "
       "run takes longer and leaves less.</p>\n";
   for (const Batch& batch : answer.reach->batch) {
     text += batch_table(answer, batch);
@@ -145,7 +151,8 @@ std::string reach_section(const Answer& answer) {
   }
   const std::size_t left = answer.reach->sequences.size() - chosen.size();
   if (left > 0) {
-    text += "<p>Shown: for each product the sequence that recovers it best. The result file has " + std::to_string(left) + " more.</p>\n";
+    text += "<p>Shown: for each product the sequence that recovers it best. The result file has " +
+            std::to_string(left) + " more.</p>\n";
   }
   return text;
 }
@@ -173,15 +180,18 @@ std::string hold_section(const Answer& answer) {
       margin += gap + fixed(100.0 * item.margin, 2);
       met += std::string(gap) + (item.pass ? "yes" : "no");
     }
-    table.row({escape_markup(answer.mixture.component(outcome.component).id), verdict_badge(outcome.verdict), asked, limit, margin, met,
-               outcome.limited_by.empty() ? "–" : escape_markup(place_words(answer, outcome.limited_by)), reason_list(outcome)});
+    table.row({escape_markup(answer.mixture.component(outcome.component).id), verdict_badge(outcome.verdict), asked,
+               limit, margin, met,
+               outcome.limited_by.empty() ? "–" : escape_markup(place_words(answer, outcome.limited_by)),
+               reason_list(outcome)});
   }
   if (!table.empty()) {
     text += table.markup();
   }
   for (const ProductOutcome& outcome : answer.reach->products) {
     if (outcome.pocket_width.has_value()) {
-      text += element("p", answer.mixture.component(outcome.component).id + ": the boundary is curved; finite reflux may gain a pocket up to " +
+      text += element("p", answer.mixture.component(outcome.component).id +
+                               ": the boundary is curved; finite reflux may gain a pocket up to " +
                                significant(100.0 * *outcome.pocket_width, 2) + " mol% wide beyond what is shown.");
     }
   }

@@ -12,8 +12,8 @@ namespace stillshed {
 namespace {
 
 std::string section(const char* id, const char* heading, const std::string& content) {
-  return std::string("<section id=\"") + id + "\" aria-labelledby=\"" + id + "-head\">\n<h2 id=\"" + id + "-head\">" + heading + "</h2>\n" +
-         content + "</section>\n";
+  return std::string("<section id=\"") + id + "\" aria-labelledby=\"" + id + "-head\">\n<h2 id=\"" + id + "-head\">" +
+         heading + "</h2>\n" + content + "</section>\n";
 }
 
 std::string page_title(const Answer& answer) {
@@ -69,9 +69,11 @@ std::string asked_markup(const Answer& answer, const ProductOutcome& outcome) {
 
 std::string verdict_card(const Answer& answer, const ProductOutcome& outcome, std::size_t k) {
   const std::string& name = answer.mixture.component(outcome.component).id;
-  std::string text = "<article class=\"verdict " + std::string(to_string(outcome.verdict)) + "\">\n<h3>" + verdict_badge(outcome.verdict) + " " +
-                     element("span", name, "product") + "</h3>\n";
-  text += element("p", outcome.sentence.empty() ? std::string(verdict_meaning(outcome.verdict)) + "." : outcome.sentence) + "\n";
+  std::string text = "<article class=\"verdict " + std::string(to_string(outcome.verdict)) + "\">\n<h3>" +
+                     verdict_badge(outcome.verdict) + " " + element("span", name, "product") + "</h3>\n";
+  text +=
+      element("p", outcome.sentence.empty() ? std::string(verdict_meaning(outcome.verdict)) + "." : outcome.sentence) +
+      "\n";
   if (outcome.verdict != Verdict::no_call && outcome.component < answer.feed.size()) {
     text += purity_gauge(answer, outcome);
   }
@@ -81,13 +83,15 @@ std::string verdict_card(const Answer& answer, const ProductOutcome& outcome, st
     text += "<div>" + element("dt", "asked") + "<dd>" + asked + "</dd></div>\n";
   }
   if (outcome.verdict != Verdict::no_call) {
-    text += fact("limit at unlimited stages", limit_percent(outcome.purity_limit_mass, 3) + " wt%, " + limit_percent(outcome.purity_limit_mole, 3) + " mol%");
+    text += fact("limit at unlimited stages", limit_percent(outcome.purity_limit_mass, 3) + " wt%, " +
+                                                  limit_percent(outcome.purity_limit_mole, 3) + " mol%");
     text += fact("recovery there", limit_percent(outcome.recovery, 1) + " %");
     if (!outcome.reading.empty()) {
       text += fact("by", reading_words(answer, outcome.reading));
     }
     if (outcome.purity_at_stages.has_value() && answer.input.plant.stages.has_value()) {
-      text += fact("first drop with " + std::to_string(*answer.input.plant.stages) + " stages", limit_percent(*outcome.purity_at_stages) + " mol%");
+      text += fact("first drop with " + std::to_string(*answer.input.plant.stages) + " stages",
+                   limit_percent(*outcome.purity_at_stages) + " mol%");
     }
   }
   if (k < answer.product_evidence.size()) {
@@ -101,7 +105,8 @@ std::string in_short(const Answer& answer) {
   std::string text;
   const std::string warnings = cautions(answer, true);
   if (!warnings.empty()) {
-    text += "<div class=\"warning\" role=\"note\">\n<p>First, before anything is heated:</p>\n<ul>\n" + warnings + "</ul>\n</div>\n";
+    text += "<div class=\"warning\" role=\"note\">\n<p>First, before anything is heated:</p>\n<ul>\n" + warnings +
+            "</ul>\n</div>\n";
   }
   if (answer.reach.has_value() && !answer.reach->products.empty()) {
     for (std::size_t k = 0; k < answer.reach->products.size(); ++k) {
@@ -109,8 +114,10 @@ std::string in_short(const Answer& answer) {
     }
   } else if (answer.survey.has_value()) {
     const std::size_t count = answer.survey->azeotropes.size();
-    text += element("p", (count == 0 ? std::string("No azeotrope") : std::to_string(count) + (count == 1 ? " azeotrope" : " azeotropes")) +
-                             " at " + pressure_text(answer.input.pressure_Pa) + "; no product was judged in this task.");
+    text +=
+        element("p", (count == 0 ? std::string("No azeotrope")
+                                 : std::to_string(count) + (count == 1 ? " azeotrope" : " azeotropes")) +
+                         " at " + pressure_text(answer.input.pressure_Pa) + "; no product was judged in this task.");
   }
   if (!answer.incomplete.empty()) {
     text += "<div class=\"missing\">\n<p>This answer is not complete:</p>\n<ul>\n";
@@ -132,8 +139,10 @@ std::string before_heating(const Answer& answer) {
   if (!others.empty()) {
     text += "<ul>\n" + others + "</ul>\n";
   }
-  return text + "<p>This is a screening aid. Your site's hazard assessment and the local fire, explosion, pressure, waste and exposure rules "
-                "come first; have the design checked by a qualified, where required licensed, person.</p>\n";
+  return text +
+         "<p>This is a screening aid. Your site's hazard assessment and the local fire, explosion, pressure, waste and "
+         "exposure rules "
+         "come first; have the design checked by a qualified, where required licensed, person.</p>\n";
 }
 
 std::string stream_section(const Answer& answer) {
@@ -152,7 +161,8 @@ std::string stream_section(const Answer& answer) {
   const double volatile_share = 1.0 - input.residue_mass_fraction;
   for (const StreamEntry& entry : input.stream) {
     table.row({escape_markup(entry.id), escape_markup(entry.given_name), escape_markup(entry.given_amount),
-               escape_markup(share_percent(entry.mass_fraction)), escape_markup(share_percent(entry.mass_fraction / volatile_share)),
+               escape_markup(share_percent(entry.mass_fraction)),
+               escape_markup(share_percent(entry.mass_fraction / volatile_share)),
                escape_markup(share_percent(entry.mole_fraction)), kilogram_cell(entry.mass_fraction)});
   }
   if (input.residue_mass_fraction > 0.0) {
@@ -160,7 +170,8 @@ std::string stream_section(const Answer& answer) {
                kilogram_cell(input.residue_mass_fraction)});
   }
   std::string text = table.markup() + "<dl class=\"facts\">\n";
-  text += fact("pressure", (input.given_pressure.empty() ? "" : input.given_pressure + " = ") + pressure_text(input.pressure_Pa));
+  text += fact("pressure",
+               (input.given_pressure.empty() ? "" : input.given_pressure + " = ") + pressure_text(input.pressure_Pa));
   if (answer.position.has_value()) {
     text += fact("starts to boil at", celsius(answer.position->bubble_temperature_K, 1) + " °C (without residue)");
   }
@@ -181,16 +192,18 @@ std::string stream_section(const Answer& answer) {
 }
 
 const char* const kFootLine =
-    "A model result, not a measurement: do not set cut points from it without a trial and an analysis. Site rules, local codes and "
+    "A model result, not a measurement: do not set cut points from it without a trial and an analysis. Site rules, "
+    "local codes and "
     "licensed practice decide.";
 
 }  // namespace
 
 std::string html_text(const Answer& answer, const PageOptions& options) {
   const std::string title = page_title(answer);
-  std::string page = "<!DOCTYPE html>\n<html lang=\"en\" xmlns=\"http://www.w3.org/1999/xhtml\">\n<head>\n<meta charset=\"utf-8\"/>\n"
-                     "<meta name=\"viewport\" content=\"width=device-width, initial-scale=1\"/>\n" +
-                     element("title", title + " – stillshed report") + "\n<style>\n" + kPageCss + "</style>\n</head>\n<body>\n";
+  std::string page =
+      "<!DOCTYPE html>\n<html lang=\"en\" xmlns=\"http://www.w3.org/1999/xhtml\">\n<head>\n<meta charset=\"utf-8\"/>\n"
+      "<meta name=\"viewport\" content=\"width=device-width, initial-scale=1\"/>\n" +
+      element("title", title + " – stillshed report") + "\n<style>\n" + kPageCss + "</style>\n</head>\n<body>\n";
   page += "<header>\n<p class=\"brand\">stillshed · what distillation can reach</p>\n" + element("h1", title) + "\n";
   std::string line = pressure_text(answer.input.pressure_Pa) + " · " + answer.model_kind;
   if (answer.input.amount_kg.has_value()) {

@@ -20,7 +20,9 @@ std::string face_table(const Answer& answer) {
     std::string index = "not evaluated";
     if (face.index_holds.has_value()) {
       index = std::string(*face.index_holds ? "holds" : "fails") +
-              (face.index_sum.has_value() ? " (" + std::to_string(*face.index_sum) + " of " + std::to_string(face.index_expected) + ")" : "");
+              (face.index_sum.has_value()
+                   ? " (" + std::to_string(*face.index_sum) + " of " + std::to_string(face.index_expected) + ")"
+                   : "");
     } else if (!face.note.empty()) {
       index += ": " + face.note;
     }
@@ -34,11 +36,15 @@ std::string face_table(const Answer& answer) {
 std::string proof_words(const Survey& survey) {
   switch (survey.status) {
     case Status::complete:
-      return "The list of azeotropes is proved complete. That means: for the stored parameters, this model and the temperature brackets "
-             "below, every solution of the single-liquid equations lies in one of the listed boxes, and each box holds exactly one.";
+      return "The list of azeotropes is proved complete. That means: for the stored parameters, this model and the "
+             "temperature brackets "
+             "below, every solution of the single-liquid equations lies in one of the listed boxes, and each box holds "
+             "exactly one.";
     case Status::degenerate:
-      return "The search is complete, but some points could not be told apart by any test: they are listed as one degenerate record each.";
-    case Status::undecided: return "The list of azeotropes is not proved complete: boxes remain that could not be decided.";
+      return "The search is complete, but some points could not be told apart by any test: they are listed as one "
+             "degenerate record each.";
+    case Status::undecided:
+      return "The list of azeotropes is not proved complete: boxes remain that could not be decided.";
     case Status::stopped: return "The search was stopped early: the list of azeotropes may be incomplete.";
     case Status::not_run:
     case Status::not_applicable: return "No proof was run: the azeotropes listed were located, and others may exist.";
@@ -52,8 +58,8 @@ std::string position_words(const Answer& answer) {
   if (position.on_boundary) {
     text = "The feed lies on a distillation boundary: the smallest change of it decides. ";
   } else if (position.nearest.has_value()) {
-    text = "The feed lies " + significant(position.nearest->distance, 3) + " in mole fraction from the nearest boundary (" +
-           position.nearest->boundary + "). ";
+    text = "The feed lies " + significant(position.nearest->distance, 3) +
+           " in mole fraction from the nearest boundary (" + position.nearest->boundary + "). ";
   } else {
     text = "No boundary parts the feed from the rest of the map. ";
   }
@@ -66,8 +72,9 @@ std::string position_words(const Answer& answer) {
 }
 
 std::string unchecked_list(const Answer& answer) {
-  std::vector<std::string> items = {"a second model and the spread of the parameters", "azeotropes of two liquids, and decanting",
-                                    "reaction, salts, foaming, fouling and hold-up", "heating and cooling media against the temperatures"};
+  std::vector<std::string> items = {
+      "a second model and the spread of the parameters", "azeotropes of two liquids, and decanting",
+      "reaction, salts, foaming, fouling and hold-up", "heating and cooling media against the temperatures"};
   if (!answer.input.plant.stages.has_value()) {
     items.insert(items.begin(), "the number of stages (none was given)");
   }
@@ -110,8 +117,10 @@ std::string trust_section(const Answer& answer) {
   std::string text;
   if (answer.survey.has_value()) {
     text += element("p", proof_words(*answer.survey));
-    text += "\n<p>Nothing is claimed about nature, about temperatures outside the brackets, or about azeotropes of two liquids. Whether each "
-            "liquid is stable is a separate test, shown with each azeotrope.</p>\n";
+    text +=
+        "\n<p>Nothing is claimed about nature, about temperatures outside the brackets, or about azeotropes of two "
+        "liquids. Whether each "
+        "liquid is stable is a separate test, shown with each azeotrope.</p>\n";
     text += face_table(answer);
   }
   if (answer.position.has_value()) {
@@ -121,7 +130,9 @@ std::string trust_section(const Answer& answer) {
 }
 
 std::string source_section(const Answer& answer, const std::string& date) {
-  std::string text = element("p", "Model: " + answer.model_kind + (answer.model_note.empty() ? "." : " (" + answer.model_note + ").")) + "\n";
+  std::string text = element("p", "Model: " + answer.model_kind +
+                                      (answer.model_note.empty() ? "." : " (" + answer.model_note + ").")) +
+                     "\n";
   HtmlTable parameters("Parameters in use");
   parameters.column("What");
   parameters.column("Record");
@@ -132,7 +143,8 @@ std::string source_section(const Answer& answer, const std::string& date) {
                     escape_markup(answer.pressure_set_ids[i]), mark});
   }
   for (const PairUse& pair : answer.pairs) {
-    parameters.row({escape_markup(member_names(answer.mixture, {pair.i, pair.j})), escape_markup(pair.record), to_string(pair.evidence)});
+    parameters.row({escape_markup(member_names(answer.mixture, {pair.i, pair.j})), escape_markup(pair.record),
+                    to_string(pair.evidence)});
   }
   if (!parameters.empty()) {
     text += parameters.markup();

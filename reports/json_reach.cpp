@@ -89,7 +89,8 @@ void ResultWriter::feed(const Position& position) {
     json_.member("liquid_phases", 1);
   } else {
     json_.member_null("liquid_phases");
-    why.add("liquid_phases", answer_.feed_stability.has_value() ? to_string(answer_.feed_stability->outcome) : "not tested");
+    why.add("liquid_phases",
+            answer_.feed_stability.has_value() ? to_string(answer_.feed_stability->outcome) : "not tested");
   }
   json_.member("bubble_temperature_K", position.bubble_temperature_K);
   composition("vapour", position.vapour);
@@ -203,7 +204,8 @@ void ResultWriter::sequence(const Sequence& item, std::size_t k) {
   json_.open_array("streams");
   for (const Sequence::Stream& stream : item.streams) {
     json_.open_object(Layout::inline_);
-    json_.member("from", "columns[" + std::to_string(stream.column) + "]." + (stream.distillate ? "distillate" : "bottoms"));
+    json_.member("from",
+                 "columns[" + std::to_string(stream.column) + "]." + (stream.distillate ? "distillate" : "bottoms"));
     composition("mole_fractions", stream.x);
     json_.member("share_of_charge_mole", stream.share);
     json_.close();

@@ -410,6 +410,8 @@ void ResultWriter::tail() {
   json_.close();
 }
 
-std::string json_text(const Answer& answer) { return ResultWriter(answer).text(); }
+std::string json_text(const Answer& answer) {
+  return ResultWriter(answer).text();
+}
 
 }  // namespace stillshed

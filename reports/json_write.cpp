@@ -8,14 +8,18 @@
 
 namespace stillshed {
 
-void JsonWriter::open_object(Layout layout) { open('{', '}', layout); }
+void JsonWriter::open_object(Layout layout) {
+  open('{', '}', layout);
+}
 
 void JsonWriter::open_object(std::string_view key, Layout layout) {
   write_key(key);
   open('{', '}', layout);
 }
 
-void JsonWriter::open_array(Layout layout) { open('[', ']', layout); }
+void JsonWriter::open_array(Layout layout) {
+  open('[', ']', layout);
+}
 
 void JsonWriter::open_array(std::string_view key, Layout layout) {
   write_key(key);

@@ -11,7 +11,9 @@ namespace {
 
 constexpr const char* kOutline = "stroke=\"#1b2b34\" stroke-width=\"1.6\"";
 
-std::string filled(const char* colour) { return std::string("fill=\"") + colour + "\" " + kOutline; }
+std::string filled(const char* colour) {
+  return std::string("fill=\"") + colour + "\" " + kOutline;
+}
 
 }  // namespace
 
@@ -71,7 +73,9 @@ namespace {
 constexpr double kLegendRow = 22.0;
 }
 
-void Legend::add(std::string words, Draw draw) { entries_.push_back({std::move(words), std::move(draw)}); }
+void Legend::add(std::string words, Draw draw) {
+  entries_.push_back({std::move(words), std::move(draw)});
+}
 
 double Legend::height(int columns) const {
   const auto rows = (static_cast<int>(entries_.size()) + columns - 1) / columns;
@@ -95,10 +99,13 @@ double overlap_area(const Rectangle& a, const Rectangle& b) {
   return width > 0.0 && height > 0.0 ? width * height : 0.0;
 }
 
-double text_width(std::string_view text, double font_size) { return 0.56 * font_size * display_width(text); }
+double text_width(std::string_view text, double font_size) {
+  return 0.56 * font_size * display_width(text);
+}
 
 double fitting_size(std::string_view text, double font_size, double width) {
-  return std::clamp(font_size * width / std::max(text_width(text, font_size), 1.0), std::min(9.0, font_size), font_size);
+  return std::clamp(font_size * width / std::max(text_width(text, font_size), 1.0), std::min(9.0, font_size),
+                    font_size);
 }
 
 void LabelPlacer::keep_clear(const std::vector<Point>& polyline, double weight) {
@@ -119,7 +126,8 @@ double LabelPlacer::cost(const Rectangle& area) const {
     sum += 20.0 * overlap_area(area, other);
   }
   for (const Spot& spot : spots_) {
-    if (spot.at.x > area.left - 1 && spot.at.x < area.right + 1 && spot.at.y > area.top - 1 && spot.at.y < area.bottom + 1) {
+    if (spot.at.x > area.left - 1 && spot.at.x < area.right + 1 && spot.at.y > area.top - 1 &&
+        spot.at.y < area.bottom + 1) {
       sum += 20.0 * spot.weight;
     }
   }
@@ -136,7 +144,8 @@ LabelPlacer::Place LabelPlacer::place(Point anchor, std::string_view text, doubl
       const double angle = std::numbers::pi * k / 8.0;
       const Point towards{std::cos(angle), std::sin(angle)};
       const Point centre = anchor + Point{towards.x * (distance + 0.5 * width), towards.y * (distance + 0.5 * height)};
-      const Rectangle area{centre.x - 0.5 * width, centre.y - 0.5 * height, centre.x + 0.5 * width, centre.y + 0.5 * height};
+      const Rectangle area{centre.x - 0.5 * width, centre.y - 0.5 * height, centre.x + 0.5 * width,
+                           centre.y + 0.5 * height};
       const double here = cost(area);
       const double judged = here + 2.0 * (distance - gap);
       if (least < 0.0 || judged < least) {

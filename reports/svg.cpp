@@ -7,7 +7,9 @@
 
 namespace stillshed {
 
-double length(Point a) { return std::hypot(a.x, a.y); }
+double length(Point a) {
+  return std::hypot(a.x, a.y);
+}
 
 Svg::Svg(double width, double height, std::string_view id, std::string_view title, std::string_view description) {
   text_ = "<svg xmlns=\"http://www.w3.org/2000/svg\" role=\"img\" viewBox=\"0 0 ";

@@ -15,9 +15,15 @@ struct Point {
   double y = 0.0;
 };
 
-[[nodiscard]] inline Point operator+(Point a, Point b) { return {a.x + b.x, a.y + b.y}; }
-[[nodiscard]] inline Point operator-(Point a, Point b) { return {a.x - b.x, a.y - b.y}; }
-[[nodiscard]] inline Point operator*(double s, Point a) { return {s * a.x, s * a.y}; }
+[[nodiscard]] inline Point operator+(Point a, Point b) {
+  return {a.x + b.x, a.y + b.y};
+}
+[[nodiscard]] inline Point operator-(Point a, Point b) {
+  return {a.x - b.x, a.y - b.y};
+}
+[[nodiscard]] inline Point operator*(double s, Point a) {
+  return {s * a.x, s * a.y};
+}
 [[nodiscard]] double length(Point a);
 
 /// Where text hangs on its point.

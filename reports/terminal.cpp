@@ -149,7 +149,8 @@ void Screen::verdict(const ProductOutcome& outcome, std::size_t k) {
   for (const std::string& piece : lines) {
     text_ += piece + '\n';
   }
-  paragraph(outcome.sentence.empty() ? std::string(verdict_meaning(outcome.verdict)) + "." : outcome.sentence, "         ", "         ");
+  paragraph(outcome.sentence.empty() ? std::string(verdict_meaning(outcome.verdict)) + "." : outcome.sentence,
+            "         ", "         ");
 }
 
 void Screen::azeotropes() {
@@ -185,12 +186,12 @@ std::string shares(const Members& members, const std::vector<double>& fractions)
 void Screen::azeotrope(std::size_t k) {
   const Azeotrope& found = answer_.survey->azeotropes[k];
   const FixedPoint& point = found.point;
-  paragraph(short_id(point.id) + " " + member_names(answer_.mixture, point.members) + ": " + celsius(point.temperature_K) + " degC, " +
-                to_string(found.boiling) + ", " + to_string(point.node) + (found.cluster ? ", not told apart" : "") + " (mark " +
-                azeotrope_evidence(answer_, k) + ")",
+  paragraph(short_id(point.id) + " " + member_names(answer_.mixture, point.members) + ": " +
+                celsius(point.temperature_K) + " degC, " + to_string(found.boiling) + ", " + to_string(point.node) +
+                (found.cluster ? ", not told apart" : "") + " (mark " + azeotrope_evidence(answer_, k) + ")",
             "", "    ");
-  paragraph(shares(point.members, {point.x.begin(), point.x.end()}) + " mol% = " +
-                shares(point.members, mass_fractions(answer_.mixture, point.x)) + " wt%",
+  paragraph(shares(point.members, {point.x.begin(), point.x.end()}) +
+                " mol% = " + shares(point.members, mass_fractions(answer_.mixture, point.x)) + " wt%",
             "    ", "    ");
   std::string measured;
   if (k < answer_.measured.size()) {
@@ -199,9 +200,9 @@ void Screen::azeotrope(std::size_t k) {
         continue;
       }
       measured += measured.empty() ? "measured " : "; ";
-      measured += match.says_none                    ? "none"
+      measured += match.says_none                   ? "none"
                   : match.temperature_K.has_value() ? celsius(*match.temperature_K) + " degC"
-                                                     : "temperature not given";
+                                                    : "temperature not given";
       if (!match.x.empty()) {
         measured += ", " + shares(point.members, {match.x.begin(), match.x.end()}) + " mol%";
       }
@@ -218,19 +219,22 @@ void Screen::map() {
     return;
   }
   const Chart& chart = *answer_.chart;
-  std::string line = "map: " + std::to_string(chart.regions.size()) + (chart.regions.size() == 1 ? " region, " : " regions, ") +
-                     std::to_string(chart.boundaries.size()) + (chart.boundaries.size() == 1 ? " boundary" : " boundaries");
+  std::string line =
+      "map: " + std::to_string(chart.regions.size()) + (chart.regions.size() == 1 ? " region, " : " regions, ") +
+      std::to_string(chart.boundaries.size()) + (chart.boundaries.size() == 1 ? " boundary" : " boundaries");
   if (answer_.position.has_value()) {
     const Position& position = *answer_.position;
     if (position.on_boundary) {
       line += "; the feed lies on a boundary";
     } else if (position.region.has_value()) {
       const Region& region = chart.regions[static_cast<std::size_t>(*position.region)];
-      line += "; feed in " + region.id + " (" + short_id(chart.fixed_points[static_cast<std::size_t>(region.unstable_node)].id) + " to " +
+      line += "; feed in " + region.id + " (" +
+              short_id(chart.fixed_points[static_cast<std::size_t>(region.unstable_node)].id) + " to " +
               short_id(chart.fixed_points[static_cast<std::size_t>(region.stable_node)].id) + ")";
     }
     if (position.nearest.has_value()) {
-      line += ", " + significant(position.nearest->distance, 3) + " in mole fraction from " + position.nearest->boundary;
+      line +=
+          ", " + significant(position.nearest->distance, 3) + " in mole fraction from " + position.nearest->boundary;
     }
     if (position.flip_component.has_value()) {
       const double kg = position.flip_kg_per_100kg;
@@ -250,7 +254,8 @@ void Screen::proof() {
   std::string line;
   switch (survey.status) {
     case Status::complete:
-      line = "proof: complete for one liquid, stored parameters and this model (" + faces + "); azeotropes of two liquids not searched";
+      line = "proof: complete for one liquid, stored parameters and this model (" + faces +
+             "); azeotropes of two liquids not searched";
       break;
     case Status::degenerate: line = "proof: complete, but some points cannot be told apart (" + faces + ")"; break;
     case Status::undecided: line = "proof: NOT complete, boxes remain undecided; azeotropes may be missing"; break;
@@ -287,6 +292,8 @@ void Screen::notes() {
 
 }  // namespace
 
-std::string terminal_text(const Answer& answer, const TerminalOptions& options) { return Screen(answer, options).text(); }
+std::string terminal_text(const Answer& answer, const TerminalOptions& options) {
+  return Screen(answer, options).text();
+}
 
 }  // namespace stillshed

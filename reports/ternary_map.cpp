@@ -27,14 +27,17 @@ std::string text_style(double size, const char* colour, const char* extra = "") 
 constexpr const char* kRim = "paint-order=\"stroke\" stroke=\"#ffffff\" stroke-width=\"3\" stroke-linejoin=\"round\"";
 
 std::string line_style(const char* colour, double width, const char* dash = nullptr) {
-  std::string style = std::string("stroke=\"") + colour + "\" stroke-width=\"" + fixed(width, 1) + "\" stroke-linejoin=\"round\"";
+  std::string style =
+      std::string("stroke=\"") + colour + "\" stroke-width=\"" + fixed(width, 1) + "\" stroke-linejoin=\"round\"";
   if (dash != nullptr) {
     style += std::string(" stroke-dasharray=\"") + dash + "\"";
   }
   return style;
 }
 
-const char* dash_of(Confines confines) { return confines == Confines::overheads ? "9 4" : nullptr; }
+const char* dash_of(Confines confines) {
+  return confines == Confines::overheads ? "9 4" : nullptr;
+}
 
 class MapDrawing {
  public:
@@ -61,7 +64,8 @@ class MapDrawing {
     marks();
     labels();
     legend_.draw(svg, {110.0, kLegendTop}, kWidth - 130.0, 2);
-    svg.text({110.0, height - 8.0}, "Corners by rising boiling point: top, left, right. Ticks run along their grid lines.",
+    svg.text({110.0, height - 8.0},
+             "Corners by rising boiling point: top, left, right. Ticks run along their grid lines.",
              text_style(12, ink::kSoft));
     return svg.finish();
   }
@@ -77,9 +81,10 @@ class MapDrawing {
   const Chart* chart() const { return answer_.chart.has_value() ? &*answer_.chart : nullptr; }
 
   void heading(const std::string& title) {
-    svg_->text({kWidth / 2, 24}, title, text_style(fitting_size(title, 17, kWidth - 20), ink::kText, "font-weight=\"600\""),
-               Anchor::middle);
-    svg_->text({kWidth / 2, 45}, "mole fractions · " + pressure_text(answer_.input.pressure_Pa) + " · " + answer_.model_kind,
+    svg_->text({kWidth / 2, 24}, title,
+               text_style(fitting_size(title, 17, kWidth - 20), ink::kText, "font-weight=\"600\""), Anchor::middle);
+    svg_->text({kWidth / 2, 45},
+               "mole fractions · " + pressure_text(answer_.input.pressure_Pa) + " · " + answer_.model_kind,
                text_style(13, ink::kSoft), Anchor::middle);
   }
 
@@ -217,17 +222,20 @@ class MapDrawing {
       placer_.keep_clear({at.x - clear, at.y - clear, at.x + clear, at.y + clear});
     };
     for (const FixedPoint& point : points_) {
-      mark(point.x, [&](Point at) { draw_node(*svg_, at, point.node); }, 8.0);
+      mark(
+          point.x, [&](Point at) { draw_node(*svg_, at, point.node); }, 8.0);
     }
     for (const auto& matches : answer_.measured) {
       for (const MeasuredMatch& match : matches) {
         if (drawn(match)) {
-          mark(match.x, [&](Point at) { draw_measured(*svg_, at, 4.5); }, 6.0);
+          mark(
+              match.x, [&](Point at) { draw_measured(*svg_, at, 4.5); }, 6.0);
         }
       }
     }
     if (!answer_.feed.empty()) {
-      mark(answer_.feed, [&](Point at) { draw_star(*svg_, at); }, 9.0);
+      mark(
+          answer_.feed, [&](Point at) { draw_star(*svg_, at); }, 9.0);
     }
   }
   /// Measured near the pressure of the map, and with a composition.
@@ -254,7 +262,8 @@ class MapDrawing {
 
   void labels() {
     corner_labels();
-    const auto label = [this](Point anchor, const std::string& words, double size, double gap, const std::string& style) {
+    const auto label = [this](Point anchor, const std::string& words, double size, double gap,
+                              const std::string& style) {
       svg_->text(placer_.place(anchor, words, size, gap).baseline, words, style);
     };
     for (const FixedPoint& point : points_) {
@@ -272,12 +281,14 @@ class MapDrawing {
     for (const Boundary& boundary : chart()->boundaries) {
       const std::vector<Point> line = path(boundary.curve.points);
       if (line.size() >= 2) {
-        label(point_along(line, 0.5).at, boundary.id, 13.0, 7.0, text_style(13, ink::kBoundary, kRim) + " font-weight=\"600\"");
+        label(point_along(line, 0.5).at, boundary.id, 13.0, 7.0,
+              text_style(13, ink::kBoundary, kRim) + " font-weight=\"600\"");
       }
     }
     for (const Region& region : chart()->regions) {
       if (region.polygon.size() >= 3 && chart()->regions.size() > 1) {
-        label(middle_of(path(region.polygon)), region.id, 13.0, 0.0, text_style(13, ink::kSoft, kRim) + " font-style=\"italic\"");
+        label(middle_of(path(region.polygon)), region.id, 13.0, 0.0,
+              text_style(13, ink::kSoft, kRim) + " font-style=\"italic\"");
       }
     }
   }
@@ -301,7 +312,8 @@ class MapDrawing {
   }
 
   void make_legend() {
-    for (const NodeType node : {NodeType::stable_node, NodeType::saddle, NodeType::unstable_node, NodeType::degenerate}) {
+    for (const NodeType node :
+         {NodeType::stable_node, NodeType::saddle, NodeType::unstable_node, NodeType::degenerate}) {
       if (shows(node)) {
         std::string words = node_words(node);
         words += node == NodeType::stable_node     ? ": curves end here"
@@ -360,10 +372,12 @@ std::string ternary_map_svg(const Answer& answer) {
 }
 
 std::string ternary_map_words(const Answer& answer) {
-  std::string words = "Triangle in mole fractions at " + pressure_text(answer.input.pressure_Pa) + ". Points by temperature: ";
+  std::string words =
+      "Triangle in mole fractions at " + pressure_text(answer.input.pressure_Pa) + ". Points by temperature: ";
   const std::vector<FixedPoint> points = fixed_points(answer);
   for (std::size_t k = 0; k < points.size(); ++k) {
-    words += (k > 0 ? "; " : "") + points[k].id + " " + celsius(points[k].temperature_K, 1) + " °C, " + node_words(points[k].node);
+    words += (k > 0 ? "; " : "") + points[k].id + " " + celsius(points[k].temperature_K, 1) + " °C, " +
+             node_words(points[k].node);
   }
   words += ".";
   if (!answer.chart.has_value()) {
@@ -375,7 +389,8 @@ std::string ternary_map_words(const Answer& answer) {
   }
   words += " Regions: " + std::to_string(answer.chart->regions.size()) + ".";
   if (answer.position.has_value() && answer.position->region.has_value()) {
-    words += " The feed lies in region " + answer.chart->regions[static_cast<std::size_t>(*answer.position->region)].id + ".";
+    words += " The feed lies in region " +
+             answer.chart->regions[static_cast<std::size_t>(*answer.position->region)].id + ".";
   }
   return words;
 }

@@ -36,7 +36,8 @@ std::array<int, 3> corners_by_boiling_point(const Survey& survey) {
   expects(survey.pure.size() == 3, "ternary map: three components needed");
   std::array<int, 3> order{0, 1, 2};
   std::stable_sort(order.begin(), order.end(), [&survey](int a, int b) {
-    return survey.pure[static_cast<std::size_t>(a)].temperature_K < survey.pure[static_cast<std::size_t>(b)].temperature_K;
+    return survey.pure[static_cast<std::size_t>(a)].temperature_K <
+           survey.pure[static_cast<std::size_t>(b)].temperature_K;
   });
   return order;
 }

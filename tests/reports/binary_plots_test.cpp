@@ -32,7 +32,8 @@ TEST(BinaryPlots, TicksAreRound) {
 TEST(BinaryPlots, PhasesOfAnIdealBinaryFollowTheClosedForm) {
   // Equal slopes: the relative volatility does not depend on temperature, y = a x / (1 + (a - 1) x).
   Answer answer = sample::binary();
-  answer.mixture = Mixture({sample::component("A", "", 60.0, 350.0), sample::component("B", "", 60.0, 360.0)}, Ideal(2));
+  answer.mixture =
+      Mixture({sample::component("A", "", 60.0, 350.0), sample::component("B", "", 60.0, 360.0)}, Ideal(2));
   const auto phases = binary_phases(answer);
   ASSERT_TRUE(phases.has_value());
   ASSERT_EQ(phases->rows.size(), 101U);
@@ -48,8 +49,9 @@ TEST(BinaryPlots, PhasesOfAnIdealBinaryFollowTheClosedForm) {
 TEST(BinaryPlots, TemperaturePlotHoldsWhatAReaderNeeds) {
   const std::string svg = temperature_composition_svg(sample::binary(), straight_phases());
   EXPECT_TRUE(testing_support::is_valid(svg, "xml"));
-  for (const char* words : {"T-x-y of acetone + methanol", "mole fractions · 1.013 bar · unifac-dortmund", "acetone, mol%",
-                            "temperature, °C", "az1  55.2 °C", "measured azeotrope", "vapour in equilibrium", "feed at its bubble point"}) {
+  for (const char* words :
+       {"T-x-y of acetone + methanol", "mole fractions · 1.013 bar · unifac-dortmund", "acetone, mol%",
+        "temperature, °C", "az1  55.2 °C", "measured azeotrope", "vapour in equilibrium", "feed at its bubble point"}) {
     EXPECT_NE(svg.find(words), std::string::npos) << words;
   }
 }

@@ -65,7 +65,8 @@ TEST(Format, TestsReadAsTheyAreWritten) {
   EXPECT_EQ(test_text(recovery, mixture), "recovery >= 90 %");
   EXPECT_EQ(reached_text({purity, 1.0, 0.005, true}), "> 99.99 wt%");
   EXPECT_EQ(reached_text({impurity, 0.0, 0.003, true}), "< 0.01 mol%");
-  EXPECT_EQ(reached_text({{ProductTest::What::purity, 0, true, 0.99995, Basis::mass}, 0.999999, 0.0, true}), "99.9999 wt%");
+  EXPECT_EQ(reached_text({{ProductTest::What::purity, 0, true, 0.99995, Basis::mass}, 0.999999, 0.0, true}),
+            "99.9999 wt%");
 }
 
 TEST(Format, WrapKeepsTheWidth) {

@@ -18,8 +18,9 @@ TEST(HtmlReport, IsWellFormed) {
 TEST(HtmlReport, SectionsStandInTheirOrder) {
   const std::string page = html_text(sample::ternary());
   std::size_t last = 0;
-  for (const char* heading : {"In short", "Before you heat anything", "Your stream", "Azeotropes and map", "What you can reach",
-                              "What holds you back", "How sure are we", "Where every number comes from"}) {
+  for (const char* heading :
+       {"In short", "Before you heat anything", "Your stream", "Azeotropes and map", "What you can reach",
+        "What holds you back", "How sure are we", "Where every number comes from"}) {
     const std::size_t at = page.find(std::string(heading) + "</h2>");
     ASSERT_NE(at, std::string::npos) << heading;
     EXPECT_GT(at, last);

@@ -36,7 +36,8 @@ TEST(HtmlTrust, WhatWasNotCheckedIsListed) {
 
 TEST(HtmlTrust, RunCanBeRepeated) {
   const std::string markup = source_section(sample::ternary(), "2026-01-02");
-  for (const char* words : {"stillshed 0.1.0", "0123456789abcdef", "2026-01-02", "acetone/wagner-25/a", "unifac-dortmund groups 7-15"}) {
+  for (const char* words :
+       {"stillshed 0.1.0", "0123456789abcdef", "2026-01-02", "acetone/wagner-25/a", "unifac-dortmund groups 7-15"}) {
     EXPECT_NE(markup.find(words), std::string::npos) << words;
   }
 }

@@ -32,7 +32,8 @@ TEST(JsonReach, DriftingCutHasTwoEndsAndNoFixedPoint) {
 
 TEST(JsonReach, ColumnsCloseTheirBalance) {
   const Json column = Json::parse(json_text(sample::ternary()))["sequences"][0]["columns"][0];
-  EXPECT_NEAR(column["distillate"]["share_of_charge_mole"].get<double>() + column["bottoms"]["share_of_charge_mole"].get<double>(),
+  EXPECT_NEAR(column["distillate"]["share_of_charge_mole"].get<double>() +
+                  column["bottoms"]["share_of_charge_mole"].get<double>(),
               column["feed"]["share_of_charge_mole"].get<double>(), 1e-15);
   EXPECT_EQ(column["split"], "direct");
   EXPECT_EQ(column["fed_by"], "charge");

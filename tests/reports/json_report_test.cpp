@@ -15,9 +15,9 @@ namespace stillshed {
 namespace {
 
 using Json = nlohmann::ordered_json;
+using ::testing::ElementsAre;
 using testing_support::is_valid;
 using testing_support::result_schema;
-using ::testing::ElementsAre;
 
 std::vector<std::string> keys(const Json& object) {
   std::vector<std::string> names;
@@ -44,10 +44,10 @@ TEST(JsonReport, SchemaRefusesWhatItDoesNotKnow) {
 
 TEST(JsonReport, KeyOrderIsTheContract) {
   EXPECT_THAT(keys(Json::parse(json_text(sample::ternary()))),
-              ElementsAre("stillshed_result", "status", "input", "seed", "versions", "pressure_Pa", "model", "components",
-                          "azeotropes", "measured_only", "rejected_roots", "fixed_points", "proof", "index_rule", "boundaries",
-                          "regions", "curves", "feed", "batch", "sequences", "stages", "products", "cautions", "notes",
-                          "provenance", "timing"));
+              ElementsAre("stillshed_result", "status", "input", "seed", "versions", "pressure_Pa", "model",
+                          "components", "azeotropes", "measured_only", "rejected_roots", "fixed_points", "proof",
+                          "index_rule", "boundaries", "regions", "curves", "feed", "batch", "sequences", "stages",
+                          "products", "cautions", "notes", "provenance", "timing"));
 }
 
 TEST(JsonReport, OnlyComputedBlocks) {

@@ -54,7 +54,8 @@ TEST(JsonWrite, NumbersReadBackAsTheSameDouble) {
 }
 
 TEST(JsonWrite, RefusesWhatIsNotANumberAndNamesThePath) {
-  for (const double bad : {std::nan(""), std::numeric_limits<double>::infinity(), -std::numeric_limits<double>::infinity()}) {
+  for (const double bad :
+       {std::nan(""), std::numeric_limits<double>::infinity(), -std::numeric_limits<double>::infinity()}) {
     JsonWriter json;
     json.open_object();
     json.open_array("points");

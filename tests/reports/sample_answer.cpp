@@ -6,7 +6,7 @@ namespace stillshed::sample {
 namespace {
 
 FixedPoint fixed_point(const std::string& id, const Members& members, const Composition& x, double temperature_K,
-                              NodeType node, std::vector<double> eigenvalues) {
+                       NodeType node, std::vector<double> eigenvalues) {
   FixedPoint point;
   point.id = id;
   point.members = members;
@@ -179,7 +179,8 @@ Reach ternary_reach(const Composition& feed) {
 
 }  // namespace
 
-MixtureComponent component(const std::string& id, const std::string& cas, double molar_mass_g_mol, double boiling_point_K) {
+MixtureComponent component(const std::string& id, const std::string& cas, double molar_mass_g_mol,
+                           double boiling_point_K) {
   MixtureComponent item;
   item.id = id;
   item.cas = cas;
@@ -200,14 +201,15 @@ Survey ternary_survey() {
                  fixed_point("methanol", {1}, {0.0, 1.0, 0.0}, 337.7, NodeType::saddle, {-0.8, 0.5}),
                  fixed_point("water", {2}, {0.0, 0.0, 1.0}, 373.15, NodeType::stable_node, {-20.0, -5.0})};
   Azeotrope azeotrope;
-  azeotrope.point = fixed_point("az1(acetone,methanol)", {0, 1}, {0.78, 0.22, 0.0}, 328.4, NodeType::unstable_node, {0.3, 0.5});
+  azeotrope.point =
+      fixed_point("az1(acetone,methanol)", {0, 1}, {0.78, 0.22, 0.0}, 328.4, NodeType::unstable_node, {0.3, 0.5});
   azeotrope.boiling = Boiling::minimum;
   azeotrope.stability = {Stability::stable, true, 0.0, {0.78, 0.22, 0.0}};
   azeotrope.box = {{0.7799, 0.2199, 0.0}, {0.7801, 0.2201, 0.0}, 328.39, 328.41};
   azeotrope.proved = true;
   survey.azeotropes = {azeotrope};
-  survey.faces = {face({0, 1}, Status::complete, 0), face({0, 2}, Status::complete, 0), face({1, 2}, Status::complete, 0),
-                  face({0, 1, 2}, Status::complete, 2)};
+  survey.faces = {face({0, 1}, Status::complete, 0), face({0, 2}, Status::complete, 0),
+                  face({1, 2}, Status::complete, 0), face({0, 1, 2}, Status::complete, 2)};
   survey.index_rule_holds = true;
   survey.boxes = 480;
   return survey;
@@ -228,9 +230,10 @@ Answer ternary() {
   answer.input.plant.stages = 3;
   answer.input.echo_json = R"({"stillshed_case": 1, "title": "Wash solvent <T-4> & \"rest\""})";
   answer.input.products = {{"acetone", {">= 99.5 wt%"}, {}, false}};
-  answer.mixture = Mixture({component("acetone", "67-64-1", 58.08, 329.2), component("methanol", "67-56-1", 32.04, 337.7),
-                            component("water", "7732-18-5", 18.015, 373.15)},
-                           Ideal(3));
+  answer.mixture =
+      Mixture({component("acetone", "67-64-1", 58.08, 329.2), component("methanol", "67-56-1", 32.04, 337.7),
+               component("water", "7732-18-5", 18.015, 373.15)},
+              Ideal(3));
   answer.model_kind = "unifac-dortmund";
   answer.model_note = "every group pair is on file";
   answer.pairs = {{0, 1, "unifac-dortmund groups 9-15", Evidence::predicted},
@@ -276,7 +279,8 @@ Answer binary() {
   answer.input.title.clear();
   answer.input.stream.resize(2);
   answer.input.amount_kg.reset();
-  answer.mixture = Mixture({component("acetone", "67-64-1", 58.08, 329.2), component("methanol", "", 32.04, 337.7)}, Ideal(2));
+  answer.mixture =
+      Mixture({component("acetone", "67-64-1", 58.08, 329.2), component("methanol", "", 32.04, 337.7)}, Ideal(2));
   answer.pairs.resize(1);
   answer.pressure_set_ids.resize(2);
   answer.pressure_evidence.resize(2);

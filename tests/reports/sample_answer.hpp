@@ -9,7 +9,8 @@
 namespace stillshed::sample {
 
 /// ln(P / 101325 Pa) = 4000 K (1 / boiling_point_K - 1 / T): equal slopes, so relative volatilities do not depend on T.
-MixtureComponent component(const std::string& id, const std::string& cas, double molar_mass_g_mol, double boiling_point_K = 350.0);
+MixtureComponent component(const std::string& id, const std::string& cas, double molar_mass_g_mol,
+                           double boiling_point_K = 350.0);
 
 Survey ternary_survey();
 
