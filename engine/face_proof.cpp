@@ -2,255 +2,322 @@
 
 #include <algorithm>
 #include <cmath>
-#include <limits>
+#include <cstddef>
+#include <optional>
 
 #include "engine/interval_newton.hpp"
 
 namespace stillshed {
 namespace {
 
-constexpr double kWindowLow = 0.5;
-constexpr double kWindowHigh = 1.6;
-constexpr double kSlice = 1.04;
-constexpr double kNothing = 1e-11;  ///< |f| below this on a whole box: indistinguishable from zero
+/// A box whose volume shrank below this share is reduced again before it is halved.
+constexpr double kMuchSmaller = 0.3;
+constexpr double kWidthGrowth = 4.0;
+/// Half-widths tried for the neighbourhood of a root.
+constexpr double kFirstRadius = 0.02;
+constexpr double kLargestRadius = 0.7;
+constexpr double kSmallestRadius = 1e-11;
+/// A side this much shorter than the widest one is not halved.
+constexpr double kSliver = 1e-7;
+
+struct KnownRoot {
+  LocatedRoot root;
+  SearchBox box;            ///< holds exactly this root
+  SearchBox neighbourhood;  ///< holds no other
+};
+
+bool holds(const SearchBox& box, const LocatedRoot& root) {
+  for (int i = 0; i < box.x.size(); ++i) {
+    if (!box.x[i].contains(root.x[i])) {
+      return false;
+    }
+  }
+  return box.T.contains(root.temperature_K);
+}
+
+double volume(const SearchBox& box) {
+  double product = box.T.width();
+  for (const Interval& side : box.x) {
+    product *= side.width();
+  }
+  return product;
+}
+
+/// Width of a column, T (column n) in units of kKelvinPerFraction.
+double scaled_width(const SearchBox& box, int column) {
+  return column == box.x.size() ? box.T.width() / kKelvinPerFraction : box.x[column].width();
+}
+
+int widest_column(const SearchBox& box) {
+  int widest = 0;
+  for (int j = 1; j <= box.x.size(); ++j) {
+    widest = scaled_width(box, j) > scaled_width(box, widest) ? j : widest;
+  }
+  return widest;
+}
+
+/// All that lies within `radius` of a root, on the closed simplex.
+SearchBox box_around(const LocatedRoot& root, double radius) {
+  const double heat_K = kKelvinPerFraction * radius;
+  SearchBox box{Vec<Interval>(root.x.size()), Interval(root.temperature_K - heat_K, root.temperature_K + heat_K)};
+  for (int i = 0; i < root.x.size(); ++i) {
+    box.x[i] = Interval(std::max(0.0, root.x[i] - radius), std::min(1.0, root.x[i] + radius));
+  }
+  return box;
+}
 
 Box to_box(const SearchBox& box) {
   Box result;
-  for (const Interval& x : box.x) {
-    result.lower.push_back(x.lower());
-    result.upper.push_back(x.upper());
+  for (const Interval& side : box.x) {
+    result.lower.push_back(side.lower());
+    result.upper.push_back(side.upper());
   }
   result.t_lower_K = box.T.lower();
   result.t_upper_K = box.T.upper();
   return result;
 }
 
-bool touches(const SearchBox& a, const SearchBox& b, double gap) {
-  for (int i = 0; i < a.x.size(); ++i) {
-    if (a.x[i].lower() > b.x[i].upper() + gap || b.x[i].lower() > a.x[i].upper() + gap) {
-      return false;
-    }
-  }
-  return true;
-}
-
-SearchBox hull_of(const SearchBox& a, const SearchBox& b) {
-  SearchBox result = a;
-  for (int i = 0; i < a.x.size(); ++i) {
-    result.x[i] = hull(a.x[i], b.x[i]);
-  }
-  result.T = hull(a.T, b.T);
-  return result;
-}
-
-bool inside(const SearchBox& small, const SearchBox& large) {
-  for (int i = 0; i < small.x.size(); ++i) {
-    if (!large.x[i].contains(small.x[i])) {
-      return false;
-    }
-  }
-  return large.T.contains(small.T);
-}
-
-/// Branch and prune over one face.
-class Prover {
+/// The rules for one face, as engine/box_search.hpp wants them.
+class FaceProver {
  public:
-  Prover(const FaceSystem& system, const ProofOptions& options)
-      : system_(system), options_(options), newton_(system, options.mutation) {}
+  FaceProver(const FaceSystem& system, const ProofOptions& options)
+      : system_(system), newton_(system, options.mutation), leaf_width_(options.cluster_width) {}
 
-  ProofResult run(const std::vector<LocatedRoot>& located) {
-    for (const LocatedRoot& root : located) {
-      add_root(root);
-    }
-    if (bracket_temperature()) {
-      search();
-    } else {
-      result_.status = Status::complete;
-    }
-    collect();
-    return result_;
-  }
-
- private:
-  struct KnownRoot {
-    LocatedRoot root;
-    SearchBox enclosure;
-    SearchBox region;  ///< holds no other root
-  };
-
-  bool add_root(const LocatedRoot& root) {
-    KnownRoot known{root, {}, {}};
-    if (!newton_.verify(root, known.enclosure)) {
-      return false;
-    }
-    known.region = newton_.largest_regular(root, known.enclosure);
-    known_.push_back(known);
-    return true;
-  }
-
-  /// Derives the temperature bracket; false when no temperature in the window is possible.
-  bool bracket_temperature() {
-    const int n = system_.size();
-    double coldest = std::numeric_limits<double>::infinity();
-    double hottest = 0.0;
-    for (int i = 0; i < n; ++i) {
-      const double T = system_.face().boiling_point_K(i, std::exp(system_.ln_pressure()));
-      coldest = std::min(coldest, T);
-      hottest = std::max(hottest, T);
-    }
-    const Vec<Interval> whole(n, Interval(0.0, 1.0));
-    bool any = false;
-    double lower = 0.0;
-    double upper = 0.0;
-    for (double T = kWindowLow * coldest; T < kWindowHigh * hottest; T *= kSlice) {
-      const double end = std::min(T * kSlice, kWindowHigh * hottest);
-      const Vec<Interval> f = system_.face().ln_k(Interval(T, end), whole, system_.ln_pressure());
-      bool possible = simplex_sum(whole.begin(), f.begin(), n).contains_zero();
-      for (int i = 0; i < n && possible; ++i) {
-        possible = f[i].contains_zero();
-      }
-      if (possible) {
-        lower = any ? lower : T;
-        upper = end;
-        any = true;
-      }
-    }
-    result_.t_lower_K = any ? lower : kWindowLow * coldest;
-    result_.t_upper_K = any ? upper : kWindowHigh * hottest;
-    return any;
-  }
-
-  void search() {
-    std::vector<SearchBox> stack;
-    stack.push_back(
-        {Vec<Interval>(system_.size(), Interval(0.0, 1.0)), Interval(result_.t_lower_K, result_.t_upper_K)});
-    while (!stack.empty()) {
-      if (result_.boxes >= options_.max_boxes || options_.stop.stop_requested() || clusters_.size() > kMaxClusters) {
-        for (const SearchBox& box : stack) {
-          result_.undecided.push_back(to_box(box));
-        }
-        result_.status = options_.stop.stop_requested() ? Status::stopped : Status::undecided;
-        return;
-      }
-      SearchBox box = stack.back();
-      stack.pop_back();
-      ++result_.boxes;
-      process(box, stack);
-    }
-    result_.status = clusters_.empty() ? Status::complete : Status::degenerate;
-  }
-
-  void process(SearchBox& box, std::vector<SearchBox>& stack) {
-    BoxState state = BoxState::unsettled;
-    for (int pass = 0; pass < 3; ++pass) {
-      if (!newton_.cut_to_simplex(box)) {
-        return;
-      }
-      if (std::any_of(known_.begin(), known_.end(),
-                      [&](const KnownRoot& known) { return inside(box, known.region); })) {
-        return;
-      }
-      const double before = newton_.size_of(box);
-      state = newton_.contract(box);
-      if (state == BoxState::excluded) {
-        return;
-      }
-      if (state == BoxState::vanishing) {
-        clusters_.push_back(box);
-        return;
-      }
-      if (state == BoxState::regular && settle_regular(box)) {
-        return;
-      }
-      if (newton_.size_of(box) > 0.5 * before) {
-        break;
-      }
-    }
-    if (newton_.widest(box) < options_.cluster_width) {
-      clusters_.push_back(box);
+  /// Verifies a root unless it is known already.
+  void add_root(const LocatedRoot& root) {
+    const bool is_known =
+        std::any_of(known_.begin(), known_.end(), [&](const KnownRoot& k) { return holds(k.neighbourhood, root); });
+    if (is_known) {
       return;
     }
-    SearchBox other = box;
-    newton_.bisect(box, other);
-    stack.push_back(other);
-    stack.push_back(box);
+    if (const std::optional<KnownRoot> verified = verify(root)) {
+      known_.push_back(*verified);
+    }
   }
 
-  /// A box with at most one root: done when that root is known (or can be found and verified now).
-  bool settle_regular(const SearchBox& box) {
-    for (const KnownRoot& known : known_) {
-      if (inside(known.enclosure, box)) {
-        return true;
+  BoxOutcome reduce(SearchBox& box) {
+    if (!IntervalNewton::cut_to_simplex(box) || settled(box)) {
+      return BoxOutcome::dismissed;
+    }
+    const double before = volume(box);
+    const double before_K = box.T.width();
+    system_.enclose(box, enclosure_);
+    if (newton_.narrow_by_value(enclosure_, box) == Narrowing::empty) {
+      return BoxOutcome::dismissed;
+    }
+    if (system_.depends_on_temperature() && box.T.width() < kMuchSmaller * before_K) {
+      return BoxOutcome::reduced;
+    }
+    newton_.set_centre(box);
+    newton_.set_gradient(enclosure_);
+    if (newton_.narrow_by_mean_value(box) == Narrowing::empty) {
+      return BoxOutcome::dismissed;
+    }
+    halved_ = column_to_halve(box);
+    if (newton_.precondition()) {
+      if (newton_.narrow_by_newton(box) == Narrowing::empty || settled(box)) {
+        return BoxOutcome::dismissed;
       }
-      if (touches(known.enclosure, box, 0.0) && newton_.is_regular(hull_of(known.enclosure, box))) {
-        return true;
+      if (newton_.regular() && finds_root_near(newton_.centre()) && settled(box)) {
+        return BoxOutcome::dismissed;
       }
     }
-    if (newton_.widest(box) > 0.05) {
-      return false;
-    }
-    LocatedRoot root;
-    root.x = newton_.centre(box);
-    root.temperature_K = box.T.mid();
-    if (!polish_root(system_, root.x, root.temperature_K, root.regularity)) {
-      return false;
-    }
-    for (const KnownRoot& known : known_) {
-      bool same = true;
-      for (int i = 0; i < root.x.size(); ++i) {
-        same = same && known.region.x[i].contains(root.x[i]);
-      }
-      if (same) {
-        return false;  // Newton left the box for a root that is known already
-      }
-    }
-    if (!add_root(root)) {
-      return false;
-    }
-    return inside(known_.back().enclosure, box);
+    return volume(box) < kMuchSmaller * before ? BoxOutcome::reduced : BoxOutcome::kept;
   }
 
-  void collect() {
-    for (const KnownRoot& known : known_) {
-      result_.roots.push_back({known.root.x, known.root.temperature_K, to_box(known.enclosure), false});
+  [[nodiscard]] bool narrow(const SearchBox& box) const { return widest(box) <= leaf_width_; }
+
+  void leaf(SearchBox box) {
+    for (std::size_t k = 0; k < clusters_.size();) {
+      if (touching(clusters_[k], box, 2.0 * leaf_width_)) {
+        box = hull(box, clusters_[k]);
+        clusters_.erase(clusters_.begin() + static_cast<std::ptrdiff_t>(k));
+        k = 0;
+      } else {
+        ++k;
+      }
     }
-    // Boxes of one cluster touch: merge until nothing changes.
-    std::vector<SearchBox> merged;
-    for (SearchBox box : clusters_) {
-      for (std::size_t k = 0; k < merged.size();) {
-        if (touches(merged[k], box, 1e-5)) {
-          box = hull_of(merged[k], box);
-          merged.erase(merged.begin() + static_cast<std::ptrdiff_t>(k));
-          k = 0;
-        } else {
-          ++k;
+    clusters_.push_back(box);
+    if (++leaves_ % kLeavesPerWidth == 0) {
+      leaf_width_ *= kWidthGrowth;
+    }
+  }
+
+  void halve(const SearchBox& box, SearchBox& first, SearchBox& second) const {
+    first = box;
+    second = box;
+    const Interval whole = halved_ == system_.size() ? box.T : box.x[halved_];
+    (halved_ == system_.size() ? first.T : first.x[halved_]) = Interval(whole.lower(), whole.mid());
+    (halved_ == system_.size() ? second.T : second.x[halved_]) = Interval(whole.mid(), whole.upper());
+  }
+
+  [[nodiscard]] const std::vector<KnownRoot>& known() const { return known_; }
+  [[nodiscard]] const std::vector<SearchBox>& clusters() const { return clusters_; }
+
+ private:
+  /// Where the f differ most over the box, unless that side is a sliver.
+  [[nodiscard]] int column_to_halve(const SearchBox& box) const {
+    int column = system_.size();
+    double largest = 0.0;
+    for (int j = 0; j <= system_.size(); ++j) {
+      const double smear = newton_.smear(box, j);
+      if (smear > largest) {
+        largest = smear;
+        column = j;
+      }
+    }
+    const bool usable = largest > 0.0 && std::isfinite(largest) && scaled_width(box, column) >= kSliver * widest(box);
+    return usable ? column : widest_column(box);
+  }
+
+  [[nodiscard]] bool settled(const SearchBox& box) const {
+    return std::any_of(known_.begin(), known_.end(), [&](const KnownRoot& k) { return inside(box, k.neighbourhood); });
+  }
+
+  /// Newton from a centre; true when that verified a new root.
+  bool finds_root_near(const BoxCentre& centre) {
+    LocatedRoot start{Composition(system_.size()), centre.T};
+    for (int i = 0; i < system_.size(); ++i) {
+      start.x[i] = centre.x[i].mid();
+      if (!(start.x[i] > 0.0)) {
+        return false;
+      }
+    }
+    const std::size_t before = known_.size();
+    if (const std::optional<LocatedRoot> root = newton_from(system_, start)) {
+      add_root(*root);
+    }
+    return known_.size() > before;
+  }
+
+  /// Gradient and Newton form over a box around a root; true when at most one root is in it.
+  [[nodiscard]] bool is_regular(SearchBox& box, const LocatedRoot& root) {
+    newton_.set_centre(box, root.x, root.temperature_K);
+    system_.enclose(box, enclosure_);
+    newton_.set_gradient(enclosure_);
+    return newton_.precondition() && newton_.regular();
+  }
+
+  /// A box in the open face that holds exactly this root.
+  [[nodiscard]] std::optional<SearchBox> box_of_existence(const LocatedRoot& root) {
+    const int n = system_.size();
+    const int pivot = static_cast<int>(std::max_element(root.x.begin(), root.x.end()) - root.x.begin());
+    for (double radius = 1e-12; radius < 1e-3; radius *= 8.0) {
+      SearchBox box = box_around(root, radius);
+      Interval rest(1.0);
+      for (int i = 0; i < n; ++i) {
+        if (i != pivot) {
+          const double reach = std::min(radius, 0.5 * root.x[i]);
+          box.x[i] = Interval(root.x[i] - reach, root.x[i] + reach);
+          rest -= box.x[i];
         }
       }
-      merged.push_back(box);
+      box.x[pivot] = rest;  // free to follow the others, as the Krawczyk step needs
+      if (rest.is_positive() && is_regular(box, root) && newton_.maps_into_itself(box)) {
+        return box;
+      }
     }
-    for (const SearchBox& box : merged) {
-      CertifiedRoot root;
-      root.x = newton_.centre(box);
-      root.temperature_K = box.T.mid();
-      root.box = to_box(box);
-      root.cluster = true;
-      result_.roots.push_back(root);
-    }
+    return std::nullopt;
   }
 
-  static constexpr std::size_t kMaxClusters = 20000;
+  [[nodiscard]] std::optional<KnownRoot> verify(const LocatedRoot& root) {
+    const std::optional<SearchBox> box = box_of_existence(root);
+    if (!box) {
+      return std::nullopt;
+    }
+    KnownRoot known{root, *box, *box};
+    const auto alone_within = [&](double radius) {
+      SearchBox around = box_around(root, radius);
+      if (!inside(*box, around) || !IntervalNewton::cut_to_simplex(around) || !is_regular(around, root)) {
+        return false;
+      }
+      known.neighbourhood = around;
+      return true;
+    };
+    // The larger the neighbourhood, the fewer boxes end beside the root.
+    double radius = kFirstRadius;
+    if (alone_within(radius)) {
+      while (radius < kLargestRadius && alone_within(1.5 * radius)) {
+        radius *= 1.5;
+      }
+    } else {
+      do {
+        radius *= 0.5;
+      } while (radius > kSmallestRadius && !alone_within(radius));
+    }
+    return known;
+  }
+
   const FaceSystem& system_;
-  const ProofOptions& options_;
   IntervalNewton newton_;
+  FaceEnclosure enclosure_;
   std::vector<KnownRoot> known_;
   std::vector<SearchBox> clusters_;
-  ProofResult result_;
+  double leaf_width_;
+  std::int64_t leaves_ = 0;
+  int halved_ = 0;  ///< column to halve of the box reduced last; n stands for T
 };
+
+/// A point that stands for a cluster: a numerical root in it or beside it, else its middle.
+LocatedRoot representative(const FaceSystem& system, const SearchBox& cluster, const std::vector<LocatedRoot>& located) {
+  constexpr double kBeside = 1e-6;
+  LocatedRoot middle{Composition(system.size()), cluster.T.mid()};
+  SearchBox reach = cluster;
+  double total = 0.0;
+  for (int i = 0; i < system.size(); ++i) {
+    middle.x[i] = std::max(cluster.x[i].mid(), 0.0);
+    total += middle.x[i];
+    reach.x[i] = Interval(cluster.x[i].lower() - kBeside, cluster.x[i].upper() + kBeside);
+  }
+  for (double& x : middle.x) {
+    x /= total;
+  }
+  reach.T = Interval(cluster.T.lower() - kKelvinPerFraction * kBeside, cluster.T.upper() + kKelvinPerFraction * kBeside);
+  const std::optional<LocatedRoot> root = newton_from(system, middle);
+  if (root && holds(reach, *root)) {
+    return *root;
+  }
+  const auto beside =
+      std::find_if(located.begin(), located.end(), [&](const LocatedRoot& known) { return holds(reach, known); });
+  return beside != located.end() ? *beside : middle;
+}
+
+bool colder(const CertifiedRoot& a, const CertifiedRoot& b) {
+  return a.temperature_K != b.temperature_K
+             ? a.temperature_K < b.temperature_K
+             : std::lexicographical_compare(a.x.begin(), a.x.end(), b.x.begin(), b.x.end());
+}
 
 }  // namespace
 
 ProofResult prove_face(const FaceSystem& system, const std::vector<LocatedRoot>& located, const ProofOptions& options) {
-  return Prover(system, options).run(located);
+  FaceProver prover(system, options);
+  for (const LocatedRoot& root : located) {
+    prover.add_root(root);
+  }
+  const SearchBox whole{Vec<Interval>(system.size(), Interval(0.0, 1.0)), temperature_bracket(system)};
+  const BoxSearchResult search = search_boxes(prover, whole, {options.max_boxes, options.stop});
+  ProofResult result;
+  result.t_lower_K = whole.T.lower();
+  result.t_upper_K = whole.T.upper();
+  result.boxes = search.boxes;
+  for (const KnownRoot& known : prover.known()) {
+    result.roots.push_back({known.root.x, known.root.temperature_K, to_box(known.box), false});
+  }
+  for (const SearchBox& cluster : prover.clusters()) {
+    const LocatedRoot point = representative(system, cluster, located);
+    result.roots.push_back({point.x, point.temperature_K, to_box(cluster), true});
+  }
+  std::sort(result.roots.begin(), result.roots.end(), colder);
+  if (search.finished) {
+    result.status = prover.clusters().empty() ? Status::complete : Status::degenerate;
+    return result;
+  }
+  result.status = search.stopped ? Status::stopped : Status::undecided;
+  for (const SearchBox& box : search.open) {
+    result.undecided.push_back(to_box(box));
+  }
+  return result;
 }
 
 }  // namespace stillshed

@@ -2,327 +2,306 @@
 
 #include <algorithm>
 #include <cmath>
+#include <limits>
+
+#include "models/means.hpp"
 
 namespace stillshed {
 namespace {
 
-constexpr double kNothing = 1e-11;
-/// Rounding of sums of a dozen mole fractions.
-constexpr double kSumSlack = 1e-15;
+constexpr double kEpsilon = std::numeric_limits<double>::epsilon();
+/// Room for the rounding of a few operations on numbers of one sign.
+constexpr double kOutward = 1.0 + 16.0 * kEpsilon;
 
-int largest(const Composition& x) {
-  return static_cast<int>(std::max_element(x.begin(), x.end()) - x.begin());
-}
+Interval around(double middle, double radius) { return Interval::outward(middle - radius, middle + radius); }
 
-Interval widened(const Interval& value, double factor) {
-  if (factor == 1.0) {
-    return value;
+double magnitude(double middle, double radius) { return (std::abs(middle) + radius) * kOutward; }
+
+Narrowing narrow(Interval& range, const Interval& by) {
+  const double before = range.width();
+  if (!intersect(range, by)) {
+    return Narrowing::empty;
   }
-  const double mid = value.mid();
-  const double radius = 0.5 * value.width() * factor;
-  return {mid - radius, mid + radius};
+  return range.width() < before ? Narrowing::narrowed : Narrowing::unchanged;
 }
 
 }  // namespace
 
-bool IntervalNewton::cut_to_simplex(SearchBox& box) const {
-  const int n = system_.size();
-  double low = 0.0;
-  double high = 0.0;
-  for (const Interval& x : box.x) {
-    low += x.lower();
-    high += x.upper();
-  }
-  if (low > 1.0 + kSumSlack || high < 1.0 - kSumSlack) {
-    return false;
-  }
-  for (int i = 0; i < n; ++i) {
-    const Interval room(1.0 - (high - box.x[i].upper()) - kSumSlack, 1.0 - (low - box.x[i].lower()) + kSumSlack);
-    if (!intersect(box.x[i], room)) {
-      return false;
+bool IntervalNewton::cut_to_simplex(SearchBox& box) {
+  constexpr int kRounds = 2;
+  for (int round = 0; round < kRounds; ++round) {
+    for (int i = 0; i < box.x.size(); ++i) {
+      Interval rest(1.0);
+      for (int j = 0; j < box.x.size(); ++j) {
+        if (j != i) {
+          rest -= box.x[j];
+        }
+      }
+      if (!intersect(box.x[i], rest)) {
+        return false;
+      }
     }
   }
   return true;
 }
 
-Composition IntervalNewton::centre(const SearchBox& box) const {
-  const int n = system_.size();
-  Composition m(n);
-  double rest = 1.0;
-  double slack = 0.0;
-  for (int i = 0; i < n; ++i) {
-    m[i] = box.x[i].mid();
-    rest -= m[i];
-    slack += 0.5 * box.x[i].width();
+void IntervalNewton::set_centre(SearchBox& box) {
+  double low = 0.0;
+  double high = 0.0;
+  for (const Interval& side : box.x) {
+    low += side.lower();
+    high += side.upper();
   }
-  if (slack > 0.0) {
-    const double share = std::clamp(rest / slack, -1.0, 1.0);
-    for (int i = 0; i < n; ++i) {
-      m[i] = std::clamp(m[i] + share * 0.5 * box.x[i].width(), box.x[i].lower(), box.x[i].upper());
-    }
+  const double share = high > low ? std::clamp((1.0 - low) / (high - low), 0.0, 1.0) : 0.5;
+  Composition x(box.x.size());
+  for (int i = 0; i < box.x.size(); ++i) {
+    x[i] = box.x[i].lower() + share * box.x[i].width();
   }
-  return m;
+  set_centre(box, x, box.T.mid());
 }
 
-const Interval& IntervalNewton::unknown(const SearchBox& box, int c) const {
-  return c == system_.size() - 1 ? box.T : box.x[member_of_unknown(c, dependent_)];
+void IntervalNewton::set_centre(SearchBox& box, const Composition& x, double T) {
+  const int n = x.size();
+  centre_.x = Vec<Interval>(n);
+  centre_.pivot = static_cast<int>(std::max_element(x.begin(), x.end()) - x.begin());
+  centre_.T = T;
+  Interval rest(1.0);
+  for (int i = 0; i < n; ++i) {
+    if (i != centre_.pivot) {
+      centre_.x[i] = Interval(x[i]);
+      rest -= centre_.x[i];
+    }
+  }
+  centre_.x[centre_.pivot] = rest;
+  centre_.f = system_.value(centre_.x, Interval(T));
+  // The way from the centre to any point of the box must lie in the box.
+  for (int i = 0; i < n; ++i) {
+    box.x[i] = hull(box.x[i], centre_.x[i]);
+  }
+  box.T = hull(box.T, Interval(T));
 }
 
-bool IntervalNewton::jacobian(const SearchBox& box, int dependent) {
-  const int n = system_.size();
-  dependent_ = dependent;
-  system_.face().ln_k_with_gradient(box.T, box.x, system_.ln_pressure(), gradient_);
-  J_ = IntervalMatrix(n);
-  bool bounded = true;
-  for (int i = 0; i < n; ++i) {
-    for (int c = 0; c + 1 < n; ++c) {
-      J_(i, c) = widened(gradient_.d_dx(i, member_of_unknown(c, dependent)) - gradient_.d_dx(i, dependent), mutation_);
-      bounded = bounded && J_(i, c).is_bounded();
+void IntervalNewton::set_gradient(const FaceEnclosure& enclosure) {
+  for (std::size_t i = 0; i < n_; ++i) {
+    const int row = static_cast<int>(i);
+    for (std::size_t j = 0; j <= n_; ++j) {
+      const Interval entry = j == n_ ? enclosure.ln_gamma.d_dT[row] + enclosure.p_dT[row]
+                                     : enclosure.ln_gamma.d_dx(row, static_cast<int>(j));
+      const double middle = entry.mid();
+      middle_[i][j] = middle;
+      radius_[i][j] = mutation_ * kOutward * std::max(entry.upper() - middle, middle - entry.lower());
     }
-    J_(i, n - 1) = widened(gradient_.d_dT[i], mutation_);
-    bounded = bounded && J_(i, n - 1).is_bounded();
   }
-  return bounded;
+}
+
+Interval IntervalNewton::offset(const SearchBox& box, std::size_t column) const {
+  return column == n_ ? box.T - centre_.T : box.x[static_cast<int>(column)] - centre_.x[static_cast<int>(column)];
+}
+
+Narrowing IntervalNewton::narrow_by_value(const FaceEnclosure& enclosure, SearchBox& box) const {
+  Narrowing result = Narrowing::unchanged;
+  const Interval middle(box.T.mid());
+  for (int i = 0; i < system_.size(); ++i) {
+    const Interval& ln_gamma = enclosure.ln_gamma.value[i];
+    if (!(ln_gamma + enclosure.p[i]).contains_zero()) {
+      return Narrowing::empty;
+    }
+    const Narrowing step = narrow(box.T, middle - (ln_gamma + system_.p(i, middle)) / enclosure.p_dT[i]);
+    if (step == Narrowing::empty) {
+      return step;
+    }
+    result = step == Narrowing::narrowed ? step : result;
+  }
+  return result;
+}
+
+Narrowing IntervalNewton::narrow_by_mean_value(SearchBox& box) const {
+  Narrowing result = Narrowing::unchanged;
+  std::array<Interval, kMostUnknowns> moved;
+  std::array<double, kMostUnknowns> width;
+  for (std::size_t j = 0; j < n_; ++j) {
+    moved[j] = offset(box, j);
+    width[j] = moved[j].width();
+  }
+  for (std::size_t i = 0; i < n_; ++i) {
+    double m = 0.0;
+    double least = std::numeric_limits<double>::infinity();
+    for (std::size_t k = 0; k < n_; ++k) {
+      double sum = 0.0;
+      for (std::size_t j = 0; j < n_; ++j) {
+        sum += std::abs(middle_[i][j] - middle_[i][k]) * width[j];
+      }
+      if (sum < least) {
+        least = sum;
+        m = middle_[i][k];
+      }
+    }
+    Interval sum = centre_.f[static_cast<int>(i)];
+    for (std::size_t j = 0; j < n_; ++j) {
+      sum += (around(middle_[i][j], radius_[i][j]) - m) * moved[j];
+    }
+    const Interval slope = around(middle_[i][n_], radius_[i][n_]);
+    if (!(sum + slope * offset(box, n_)).contains_zero()) {
+      return Narrowing::empty;
+    }
+    const Narrowing step = narrow(box.T, centre_.T - sum / slope);
+    if (step == Narrowing::empty) {
+      return step;
+    }
+    result = step == Narrowing::narrowed ? step : result;
+  }
+  return result;
+}
+
+std::size_t IntervalNewton::unknown(std::size_t row) const {
+  return row < static_cast<std::size_t>(centre_.pivot) ? row : row + 1;  // the last row gets column n
 }
 
 bool IntervalNewton::precondition() {
-  const int n = system_.size();
-  SmallMatrix middle(n, n);
-  for (int i = 0; i < n; ++i) {
-    for (int c = 0; c < n; ++c) {
-      middle(i, c) = J_(i, c).mid();
+  const auto pivot = static_cast<std::size_t>(centre_.pivot);
+  SquareArray a;
+  for (std::size_t i = 0; i < n_; ++i) {
+    for (std::size_t r = 0; r < n_; ++r) {
+      const std::size_t j = unknown(r);
+      a[i][r] = middle_[i][j] - (j == n_ ? 0.0 : middle_[i][pivot]);
     }
   }
-  Y_ = middle.inverse();
-  if (!Y_.allFinite()) {
+  SquareArray y;
+  if (!invert(a, y, n_)) {
     return false;
   }
-  A_ = IntervalMatrix(n);
-  for (int r = 0; r < n; ++r) {
-    for (int c = 0; c < n; ++c) {
-      Interval sum = J_(0, c) * Y_(r, 0);
-      for (int k = 1; k < n; ++k) {
-        sum += J_(k, c) * Y_(r, k);
+  const double rounding = static_cast<double>(n_ + 4) * kEpsilon;
+  for (std::size_t r = 0; r < n_; ++r) {
+    newton_value_[r] = Interval(0.0);
+    for (std::size_t i = 0; i < n_; ++i) {
+      newton_value_[r] += y[r][i] * centre_.f[static_cast<int>(i)];
+    }
+    for (std::size_t j = 0; j <= n_; ++j) {
+      double middle = 0.0;
+      double radius = 0.0;
+      double size = 0.0;  // of the terms of the middle, for its rounding
+      for (std::size_t i = 0; i < n_; ++i) {
+        const double m = j == n_ ? 0.0 : middle_[i][pivot];
+        const double weight = std::abs(y[r][i]);
+        middle += y[r][i] * (middle_[i][j] - m);
+        radius += weight * radius_[i][j];
+        size += weight * (std::abs(middle_[i][j]) + std::abs(m));
       }
-      A_(r, c) = sum;
+      if (!std::isfinite(middle) || !std::isfinite(radius) || !std::isfinite(size)) {
+        return false;
+      }
+      newton_middle_[r][j] = middle;
+      newton_radius_[r][j] = (radius * (1.0 + rounding) + size * rounding) * kOutward;
     }
   }
   return true;
 }
 
-/// |I - Y J| rad (+ shift) < rad, the contraction test.
-bool IntervalNewton::contracts(const SearchBox& box, const Vec<double>* shift) const {
-  const int n = system_.size();
-  for (int r = 0; r < n; ++r) {
-    double sum = shift != nullptr ? (*shift)[r] : 0.0;
-    for (int c = 0; c < n; ++c) {
-      const Interval entry = r == c ? 1.0 - A_(r, c) : A_(r, c);
-      sum += entry.magnitude() * 0.5 * unknown(box, c).width();
-    }
-    if (!(sum * (1.0 + 1e-12) < 0.5 * unknown(box, r).width())) {
-      return false;
-    }
+Narrowing IntervalNewton::narrow_by_newton(SearchBox& box) const {
+  Narrowing result = Narrowing::unchanged;
+  std::array<Interval, kMostUnknowns> moved;
+  for (std::size_t j = 0; j <= n_; ++j) {
+    moved[j] = offset(box, j);
   }
-  return true;
-}
-
-Vec<Interval> IntervalNewton::residual_at(const Composition& m, double T, int dependent) const {
-  const int n = system_.size();
-  Vec<Interval> x(n);
-  Interval rest(1.0);
-  for (int i = 0; i < n; ++i) {
-    if (i != dependent) {
-      x[i] = Interval(m[i]);
-      rest -= x[i];
-    }
-  }
-  x[dependent] = rest;
-  return system_.face().ln_k(Interval(T), x, system_.ln_pressure());
-}
-
-/// Hansen-Sengupta sweep; false when the box is excluded.
-bool IntervalNewton::newton(SearchBox& box, const Composition& m) {
-  const int n = system_.size();
-  const double T = box.T.mid();
-  const Vec<Interval> f = residual_at(m, T, dependent_);
-  Vec<Interval> offset(n);
-  for (int c = 0; c < n; ++c) {
-    const double at = c == n - 1 ? T : m[member_of_unknown(c, dependent_)];
-    offset[c] = unknown(box, c) - at;
-  }
-  for (int r = 0; r < n; ++r) {
-    Interval sum(0.0);
-    for (int k = 0; k < n; ++k) {
-      sum += f[k] * Y_(r, k);
-    }
-    for (int c = 0; c < n; ++c) {
-      if (c != r) {
-        sum += A_(r, c) * offset[c];
+  for (std::size_t r = 0; r < n_; ++r) {
+    const std::size_t k = unknown(r);
+    Interval rest = newton_value_[r];
+    for (std::size_t j = 0; j <= n_; ++j) {
+      if (j != k) {
+        rest += around(newton_middle_[r][j], newton_radius_[r][j]) * moved[j];
       }
     }
-    if (A_(r, r).contains_zero()) {
-      if (!(sum + A_(r, r) * offset[r]).contains_zero()) {
+    const Interval diagonal = around(newton_middle_[r][k], newton_radius_[r][k]);
+    if (!(rest + diagonal * moved[k]).contains_zero()) {
+      return Narrowing::empty;
+    }
+    // A diagonal that holds zero gives the whole line here.
+    const Interval at = k == n_ ? Interval(centre_.T) : centre_.x[static_cast<int>(k)];
+    Interval& side = k == n_ ? box.T : box.x[static_cast<int>(k)];
+    const Narrowing step = narrow(side, at - rest / diagonal);
+    if (step == Narrowing::empty) {
+      return step;
+    }
+    if (step == Narrowing::narrowed) {
+      result = step;
+      moved[k] = offset(box, k);
+    }
+  }
+  return cut_to_simplex(box) ? result : Narrowing::empty;
+}
+
+bool IntervalNewton::regular() const {
+  // Let M v = 0 with M within Y D and the fractions of v adding up to zero, and take the row k of the largest |v_k| / d_k:
+  //   |M_kk| d_k <= sum over the other unknowns of |M_kj| d_j + |M_kp| sum over the fractions of d_j
+  // because |v_p| is at most the sum of the other |v_j|. A scaling d that contradicts this in every row is looked for by
+  // a few Jacobi sweeps.
+  const auto pivot = static_cast<std::size_t>(centre_.pivot);
+  std::array<double, kMostUnknowns> d;
+  for (std::size_t r = 0; r < n_; ++r) {
+    d[r] = unknown(r) == n_ ? kKelvinPerFraction : 1.0;
+  }
+  constexpr int kSweeps = 4;
+  constexpr double kRoom = 1.0 - 1e-12;  // for the rounding of the sums below
+  for (int sweep = 0; sweep < kSweeps; ++sweep) {
+    double of_pivot = 0.0;
+    for (std::size_t r = 0; r < n_; ++r) {
+      of_pivot += unknown(r) == n_ ? 0.0 : d[r];
+    }
+    bool dominant = true;
+    std::array<double, kMostUnknowns> next;
+    for (std::size_t r = 0; r < n_; ++r) {
+      const std::size_t k = unknown(r);
+      const double diagonal = std::abs(newton_middle_[r][k]) - newton_radius_[r][k] * kOutward;
+      if (!(diagonal > 0.0)) {
         return false;
       }
-      continue;
-    }
-    const Interval step = -sum / A_(r, r);
-    if (!intersect(offset[r], step)) {
-      return false;
-    }
-    if (r == n - 1) {
-      if (!intersect(box.T, offset[r] + T)) {
-        return false;
+      double others = magnitude(newton_middle_[r][pivot], newton_radius_[r][pivot]) * of_pivot;
+      for (std::size_t s = 0; s < n_; ++s) {
+        if (s != r) {
+          others += magnitude(newton_middle_[r][unknown(s)], newton_radius_[r][unknown(s)]) * d[s];
+        }
       }
-    } else {
-      const int i = member_of_unknown(r, dependent_);
-      if (!intersect(box.x[i], offset[r] + m[i])) {
-        return false;
-      }
+      dominant = dominant && others < diagonal * d[r] * kRoom;
+      next[r] = std::max(1.02 * others / diagonal, 1e-3 * d[r]);
     }
-  }
-  return true;
-}
-
-BoxState IntervalNewton::contract(SearchBox& box) {
-  const int n = system_.size();
-  const Composition m = centre(box);
-  double total = 0.0;
-  for (const double x : m) {
-    total += x;
-  }
-  // T from each equation, mean-value form in T at fixed x-box.
-  const double T = box.T.mid();
-  const bool bounded = jacobian(box, largest(m));
-  bool vanishing = true;
-  for (int i = 0; i < n; ++i) {
-    if (!gradient_.value[i].contains_zero()) {
-      return BoxState::excluded;
-    }
-    vanishing = vanishing && gradient_.value[i].magnitude() < kNothing;
-  }
-  if (!simplex_sum(box.x.begin(), gradient_.value.begin(), n).contains_zero()) {
-    return BoxState::excluded;
-  }
-  if (vanishing) {
-    return BoxState::vanishing;
-  }
-  if (box.T.width() > 1e-3) {
-    const Vec<Interval> at_T = system_.face().ln_k(Interval(T), box.x, system_.ln_pressure());
-    for (int i = 0; i < n; ++i) {
-      if (gradient_.d_dT[i].is_positive() && !intersect(box.T, T - at_T[i] / gradient_.d_dT[i])) {
-        return BoxState::excluded;
-      }
-    }
-  }
-  if (!bounded || std::abs(total - 1.0) > 1e-12 || !precondition()) {
-    return BoxState::unsettled;
-  }
-  const SearchBox before = box;
-  if (!newton(box, m)) {
-    return BoxState::excluded;
-  }
-  return contracts(before, nullptr) ? BoxState::regular : BoxState::unsettled;
-}
-
-bool IntervalNewton::is_regular(const SearchBox& box) {
-  return jacobian(box, largest(centre(box))) && precondition() && contracts(box, nullptr);
-}
-
-bool IntervalNewton::verify(const LocatedRoot& root, SearchBox& enclosure) {
-  const int n = system_.size();
-  const int dependent = largest(root.x);
-  double radius = 1e-12;
-  for (int attempt = 0; attempt < 8; ++attempt, radius *= 8.0) {
-    SearchBox box{Vec<Interval>(n), Interval(root.temperature_K - 100.0 * radius, root.temperature_K + 100.0 * radius)};
-    double total = 0.0;
-    for (int i = 0; i < n; ++i) {
-      if (i != dependent) {
-        const double r = std::min(radius, 0.25 * root.x[i]);  // stays inside the open face
-        box.x[i] = Interval(root.x[i] - r, root.x[i] + r);
-        total += r;
-      }
-    }
-    // The dependent one takes whatever the others leave, so the test covers every z of the box.
-    box.x[dependent] = Interval(root.x[dependent] - 1.01 * total - 1e-15, root.x[dependent] + 1.01 * total + 1e-15);
-    if (!jacobian(box, dependent) || !precondition()) {
-      continue;
-    }
-    const Vec<Interval> f = residual_at(root.x, root.temperature_K, dependent);
-    Vec<double> shift(n);
-    for (int r = 0; r < n; ++r) {
-      Interval sum(0.0);
-      for (int k = 0; k < n; ++k) {
-        sum += f[k] * Y_(r, k);
-      }
-      shift[r] = sum.magnitude();
-    }
-    if (contracts(box, &shift)) {
-      enclosure = box;
+    if (dominant) {
       return true;
     }
+    d = next;
   }
   return false;
 }
 
-SearchBox IntervalNewton::largest_regular(const LocatedRoot& root, const SearchBox& enclosure) {
-  const int n = system_.size();
-  for (double radius = 0.2; radius > 1e-9; radius *= 0.5) {
-    SearchBox box{Vec<Interval>(n), Interval(root.temperature_K - 60.0 * radius, root.temperature_K + 60.0 * radius)};
-    for (int i = 0; i < n; ++i) {
-      box.x[i] = Interval(std::max(0.0, root.x[i] - radius), std::min(1.0, root.x[i] + radius));
+bool IntervalNewton::maps_into_itself(const SearchBox& box) const {
+  for (std::size_t r = 0; r < n_; ++r) {
+    const std::size_t k = unknown(r);
+    Interval image = k == n_ ? Interval(centre_.T) : centre_.x[static_cast<int>(k)];
+    image -= newton_value_[r];
+    for (std::size_t j = 0; j <= n_; ++j) {
+      const Interval entry = around(newton_middle_[r][j], newton_radius_[r][j]);
+      image -= (j == k ? entry - 1.0 : entry) * offset(box, j);
     }
-    if (is_regular(box)) {
-      return box;
+    const Interval& side = k == n_ ? box.T : box.x[static_cast<int>(k)];
+    if (!side.contains_inside(image)) {
+      return false;
     }
   }
-  return enclosure;
+  return true;
 }
 
-double IntervalNewton::size_of(const SearchBox& box) const {
-  double size = 1.0;
-  for (const Interval& x : box.x) {
-    size *= std::max(x.width(), 1e-14);
+double IntervalNewton::smear(const SearchBox& box, int column) const {
+  if (column == centre_.pivot) {
+    return 0.0;
   }
-  return size;
-}
-
-double IntervalNewton::widest(const SearchBox& box) const {
-  double width = 0.0;
-  for (const Interval& x : box.x) {
-    width = std::max(width, x.width());
+  const auto j = static_cast<std::size_t>(column);
+  const auto pivot = static_cast<std::size_t>(centre_.pivot);
+  double largest = 0.0;
+  for (std::size_t i = 0; i < n_; ++i) {
+    const double slope = j == n_ ? std::abs(middle_[i][j]) + radius_[i][j]
+                                 : std::abs(middle_[i][j] - middle_[i][pivot]) + radius_[i][j] + radius_[i][pivot];
+    largest = std::max(largest, slope);
   }
-  return width;
-}
-
-void IntervalNewton::bisect(SearchBox& box, SearchBox& other) {
-  const int n = system_.size();
-  // Split where the equations vary most over the box (smear rule); T only while it is really wide.
-  int best = -1;
-  double most = -1.0;
-  for (int c = 0; c < n; ++c) {
-    double slope = 0.0;
-    for (int i = 0; i < n; ++i) {
-      const double size = J_(i, c).magnitude();
-      slope = std::max(slope, std::isfinite(size) ? size : 1e6);
-    }
-    const double smear = slope * unknown(box, c).width();
-    if (smear > most) {
-      most = smear;
-      best = c;
-    }
-  }
-  const auto halve = [](Interval& low, Interval& high) {
-    const double middle = low.mid();
-    high = Interval(middle, low.upper());
-    low = Interval(low.lower(), middle);
-  };
-  if (best == n - 1) {
-    halve(box.T, other.T);
-  } else {
-    const int i = member_of_unknown(best, dependent_);
-    halve(box.x[i], other.x[i]);
-  }
+  return largest * (j == n_ ? box.T.width() : box.x[column].width());
 }
 
 }  // namespace stillshed

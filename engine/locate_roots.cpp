@@ -2,149 +2,192 @@
 
 #include <algorithm>
 #include <cmath>
-#include <random>
+
+#include "engine/small_linear.hpp"
 
 namespace stillshed {
 namespace {
 
-constexpr int kMaxIterations = 60;
-constexpr double kResidual = 1e-11;
+constexpr int kMostSteps = 60;
+constexpr double kLargestMove = 0.3;        ///< mole fraction, one step
+constexpr double kLargestHeating_K = 40.0;  ///< one step
+constexpr double kKeepShare = 0.1;          ///< a step leaves at least this share of each fraction
+constexpr double kTiny = 1e-9;              ///< a fraction below it that the linear model sends negative has left the face
+constexpr double kVanished = 1e-15;         ///< a fraction below it has left in any case
+constexpr double kConverged = 1e-15;
+constexpr double kResidual = 1e-11;         ///< accepted |f| at the end
 
-int largest(const Composition& x) {
-  return static_cast<int>(std::max_element(x.begin(), x.end()) - x.begin());
+/// Newton step of all x (sum zero) and T; false when singular.
+bool newton_step(const LnGammaGradient<double>& f, std::array<double, kMostUnknowns>& step) {
+  const auto n = static_cast<std::size_t>(f.value.size());
+  SquareArray a;
+  for (std::size_t i = 0; i < n; ++i) {
+    for (std::size_t j = 0; j < n; ++j) {
+      a[i][j] = f.d_dx(static_cast<int>(i), static_cast<int>(j));
+    }
+    a[i][n] = f.d_dT[static_cast<int>(i)];
+    a[n][i] = 1.0;
+    step[i] = -f.value[static_cast<int>(i)];
+  }
+  a[n][n] = 0.0;
+  step[n] = 0.0;
+  return solve_in_place(a, step, n + 1);
 }
 
-std::vector<Composition> starts_of(int n, const std::vector<Composition>& nearby, std::uint64_t seed) {
-  std::vector<Composition> starts;
-  starts.emplace_back(n, 1.0 / n);
-  starts.insert(starts.end(), nearby.begin(), nearby.end());
-  if (n <= 6) {
-    for (int i = 0; i < n; ++i) {
-      for (const double rich : {0.9, 0.99}) {
-        Composition x(n, (1.0 - rich) / std::max(1, n - 1));
-        x[i] = rich;
-        starts.push_back(x);
-      }
-      for (int j = 0; j < i && n > 2; ++j) {
-        Composition x(n, 0.1 / (n - 2));
-        x[i] = x[j] = 0.45;
-        starts.push_back(x);
-      }
+double largest_residual(const LnGammaGradient<double>& f) {
+  double largest = 0.0;
+  for (const double value : f.value) {
+    largest = std::max(largest, std::abs(value));
+    if (!std::isfinite(value)) {
+      return value;
     }
   }
-  std::mt19937_64 generator(seed * 1000003 + static_cast<std::uint64_t>(n));
-  std::exponential_distribution<double> exponential(1.0);
-  const int random = n <= 5 ? 8 * n : 4;
-  for (int k = 0; k < random; ++k) {
-    Composition x(n);
-    double sum = 0.0;
-    for (double& value : x) {
-      value = exponential(generator);
-      sum += value;
+  return largest;
+}
+
+/// Share of the step that stays inside the limits above.
+double damping(const LocatedRoot& at, const std::array<double, kMostUnknowns>& step) {
+  const auto n = static_cast<std::size_t>(at.x.size());
+  double share = std::min(1.0, kLargestHeating_K / (std::abs(step[n]) + 1e-300));
+  for (std::size_t i = 0; i < n; ++i) {
+    const double x = at.x[static_cast<int>(i)];
+    share = std::min(share, kLargestMove / (std::abs(step[i]) + 1e-300));
+    if (step[i] < 0.0) {
+      share = std::min(share, (1.0 - kKeepShare) * x / -step[i]);
     }
-    for (double& value : x) {
-      value /= sum;
-    }
+  }
+  return share;
+}
+
+std::vector<Composition> starting_compositions(int n, const LocateOptions& options) {
+  std::vector<Composition> starts;
+  const double even = 1.0 / n;
+  starts.emplace_back(n, even);
+  constexpr double kRich = 0.8;
+  for (int i = 0; i < n; ++i) {
+    Composition x(n, (1.0 - kRich) * even);
+    x[i] += kRich;
     starts.push_back(x);
+  }
+  starts.insert(starts.end(), options.nearby.begin(), options.nearby.end());
+  for (int k = 0; k < options.spread; ++k) {
+    starts.push_back(simplex_sequence(n, static_cast<std::uint64_t>(k), options.seed));
   }
   return starts;
 }
 
+}  // namespace
+
+Composition simplex_sequence(int size, std::uint64_t index, std::uint64_t seed) {
+  // Additive recurrence with the powers of 1/g, g the root of g^size = g + 1 (a generalised golden ratio), carried to the
+  // simplex by exponential spacings.
+  double g = 2.0;
+  for (int k = 0; k < 40; ++k) {
+    g = std::pow(1.0 + g, 1.0 / size);
+  }
+  Composition x(size);
+  double total = 0.0;
+  double share = 1.0;
+  for (int i = 0; i < size; ++i) {
+    share /= g;
+    const double shift = 0.5 + 0.61803398874989485 * static_cast<double>(seed % 1'000'003ULL);
+    const double u = std::fmod(shift + static_cast<double>(index + 1) * share, 1.0);
+    x[i] = -std::log(std::clamp(u, 1e-9, 1.0 - 1e-9));
+    total += x[i];
+  }
+  for (double& fraction : x) {
+    fraction /= total;
+  }
+  return x;
+}
+
+double start_temperature(const FaceSystem& system, const Composition& x) {
+  double T = 0.0;
+  for (int i = 0; i < x.size(); ++i) {
+    T += x[i] * system.boiling_points_K()[i];
+  }
+  LnGammaGradient<double> f;
+  constexpr int kSteps = 2;
+  for (int step = 0; step < kSteps; ++step) {
+    system.evaluate(x, T, f);
+    double sum = 0.0;
+    double slope = 0.0;
+    for (int i = 0; i < x.size(); ++i) {
+      sum += x[i] * f.value[i];
+      slope += x[i] * f.d_dT[i];
+    }
+    if (slope > 0.0) {
+      T -= std::clamp(sum / slope, -kLargestHeating_K, kLargestHeating_K);
+    }
+  }
+  return T;
+}
+
+std::optional<LocatedRoot> newton_from(const FaceSystem& system, LocatedRoot at) {
+  const auto n = static_cast<std::size_t>(system.size());
+  LnGammaGradient<double> f;
+  std::array<double, kMostUnknowns> step{};
+  double last_size = 1e300;
+  for (int k = 0; k < kMostSteps; ++k) {
+    system.evaluate(at.x, at.temperature_K, f);
+    if (!newton_step(f, step)) {
+      break;
+    }
+    const double share = damping(at, step);
+    double size = std::abs(step[n]) / at.temperature_K;
+    double total = 0.0;
+    for (std::size_t i = 0; i < n; ++i) {
+      double& x = at.x[static_cast<int>(i)];
+      const bool leaves = x < kTiny && step[i] < -2.0 * x;
+      size = std::max(size, std::abs(step[i]));
+      x += share * step[i];
+      if (leaves || !(x > kVanished)) {
+        return std::nullopt;
+      }
+      total += x;
+    }
+    for (double& x : at.x) {
+      x /= total;
+    }
+    at.temperature_K += share * step[n];
+    if (!(at.temperature_K > 0.0)) {
+      return std::nullopt;
+    }
+    // Converged, or as close as rounding lets it come.
+    if (size <= kConverged || (size < 1e-11 && size >= 0.5 * last_size)) {
+      break;
+    }
+    last_size = size;
+  }
+  system.evaluate(at.x, at.temperature_K, f);
+  if (!(largest_residual(f) <= kResidual)) {
+    return std::nullopt;
+  }
+  return at;
+}
+
 bool same_root(const LocatedRoot& a, const LocatedRoot& b) {
-  // A nearly double root is only found to the square root of rounding.
-  const double loose = std::min(a.regularity, b.regularity) < 1e-6 ? 1e-5 : 1e-8;
   for (int i = 0; i < a.x.size(); ++i) {
-    if (std::abs(a.x[i] - b.x[i]) > loose * std::max(1e-3, std::max(a.x[i], b.x[i]))) {
+    if (std::abs(a.x[i] - b.x[i]) > 1e-6 * std::min(a.x[i], b.x[i]) + 1e-12) {
       return false;
     }
   }
   return true;
 }
 
-}  // namespace
-
-double start_temperature(const FaceSystem& system, const Composition& x) {
-  double T = 0.0;
-  for (int i = 0; i < system.size(); ++i) {
-    T += x[i] * system.face().boiling_point_K(i, std::exp(system.ln_pressure()));
-  }
-  for (int step = 0; step < 4; ++step) {
-    const Vec<double> f = system.residual(x, T);
-    double sum = 0.0;
-    double slope = 0.0;
-    for (int i = 0; i < system.size(); ++i) {
-      sum += x[i] * f[i];
-      slope += x[i] * system.face().component(i).pressure.d_ln_psat_dT(T);
-    }
-    T = std::clamp(T - sum / slope, 0.6 * T, 1.6 * T);
-  }
-  return T;
-}
-
-bool polish_root(const FaceSystem& system, Composition& x, double& T, double& regularity) {
-  const int n = system.size();
-  SmallVector f;
-  SmallMatrix jacobian;
-  for (int iteration = 0; iteration < kMaxIterations; ++iteration) {
-    const int dependent = largest(x);
-    system.evaluate(x, T, dependent, f, jacobian);
-    const double miss = f.cwiseAbs().maxCoeff();
-    if (!std::isfinite(miss)) {
-      return false;
-    }
-    // Scale the temperature column so that singular values compare like with like.
-    jacobian.col(n - 1) *= T;
-    const Eigen::PartialPivLU<SmallMatrix> lu(jacobian);
-    const SmallVector step = lu.solve(f);
-    if (!step.allFinite()) {
-      return false;
-    }
-    Composition change(n, 0.0);
-    for (int c = 0; c + 1 < n; ++c) {
-      const int i = member_of_unknown(c, dependent);
-      change[i] = -step[c];
-      change[dependent] += step[c];
-    }
-    double scale = std::min(1.0, 0.15 / std::max(1e-300, std::abs(step[n - 1])));
-    for (int i = 0; i < n; ++i) {
-      if (change[i] < 0.0) {
-        scale = std::min(scale, 0.95 * x[i] / -change[i]);
-      }
-    }
-    double moved = 0.0;
-    for (int i = 0; i < n; ++i) {
-      x[i] += scale * change[i];
-      moved = std::max(moved, std::abs(scale * change[i]) / std::max(x[i], 1e-300));
-    }
-    T -= scale * step[n - 1] * T;
-    if (*std::min_element(x.begin(), x.end()) < 1e-13) {
-      return false;  // runs into a sub-face, whose own search finds what is there
-    }
-    if (miss < kResidual && (moved < 1e-11 || iteration > 40)) {
-      const Eigen::JacobiSVD<SmallMatrix> svd(jacobian);
-      regularity = svd.singularValues()[n - 1] / svd.singularValues()[0];
-      return true;
-    }
-  }
-  return false;
-}
-
-std::vector<LocatedRoot> locate_roots(const FaceSystem& system, const std::vector<Composition>& nearby,
-                                      std::uint64_t seed) {
+std::vector<LocatedRoot> locate_roots(const FaceSystem& system, const LocateOptions& options) {
   std::vector<LocatedRoot> roots;
-  for (const Composition& start : starts_of(system.size(), nearby, seed)) {
-    LocatedRoot root{start, start_temperature(system, start), 0.0};
-    if (!polish_root(system, root.x, root.temperature_K, root.regularity)) {
-      continue;
-    }
-    if (std::none_of(roots.begin(), roots.end(), [&](const LocatedRoot& known) { return same_root(known, root); })) {
-      roots.push_back(root);
+  for (const Composition& x : starting_compositions(system.size(), options)) {
+    const std::optional<LocatedRoot> root = newton_from(system, {x, start_temperature(system, x)});
+    if (root && std::none_of(roots.begin(), roots.end(), [&](const LocatedRoot& r) { return same_root(r, *root); })) {
+      roots.push_back(*root);
     }
   }
   std::sort(roots.begin(), roots.end(), [](const LocatedRoot& a, const LocatedRoot& b) {
-    return a.temperature_K != b.temperature_K
-               ? a.temperature_K < b.temperature_K
-               : std::lexicographical_compare(a.x.begin(), a.x.end(), b.x.begin(), b.x.end());
+    if (a.temperature_K != b.temperature_K) {
+      return a.temperature_K < b.temperature_K;
+    }
+    return std::lexicographical_compare(a.x.begin(), a.x.end(), b.x.begin(), b.x.end());
   });
   return roots;
 }

@@ -149,8 +149,13 @@ class Surveyor {
       return;
     }
     const FaceSystem system(mixture_.face(members), pressure_Pa_);
-    work.located = locate_roots(system, nearby_starts(members), options_.seed);
-    if (members.size() <= prove_up_to_) {
+    LocateOptions locate;
+    locate.nearby = nearby_starts(members);
+    locate.seed = options_.seed;
+    const bool prove = members.size() <= prove_up_to_;
+    locate.spread = (prove ? 2 : 8) * members.size();
+    work.located = locate_roots(system, locate);
+    if (prove) {
       ProofOptions proof;
       proof.max_boxes = options_.max_boxes;
       proof.cluster_width = options_.cluster_width;
