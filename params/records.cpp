@@ -29,4 +29,35 @@ const char* to_string(AzeotropeKind kind) {
   return "unknown";
 }
 
+const char* to_string(CautionTrigger trigger) {
+  switch (trigger) {
+    case CautionTrigger::always: return "always";
+    case CautionTrigger::substance: return "substance";
+    case CautionTrigger::hazard: return "hazard";
+    case CautionTrigger::pair: return "pair";
+    case CautionTrigger::declared: return "declared";
+    case CautionTrigger::near_dry: return "near-dry";
+    case CautionTrigger::unknowns: return "unknowns";
+    case CautionTrigger::low_ignition: return "low-ignition";
+    case CautionTrigger::flash_point: return "flash-point";
+    case CautionTrigger::region: return "region";
+    case CautionTrigger::use: return "use";
+    case CautionTrigger::pressure: return "pressure";
+    case CautionTrigger::vacuum: return "vacuum";
+    case CautionTrigger::two_liquids: return "two-liquids";
+    case CautionTrigger::extrapolated: return "extrapolated";
+  }
+  return "unknown";
+}
+
+const char* to_string(CheckKind kind) {
+  switch (kind) {
+    case CheckKind::activity: return "activity";
+    case CheckKind::boiling_point: return "boiling-point";
+    case CheckKind::fenske: return "fenske";
+    case CheckKind::azeotropes: return "azeotropes";
+  }
+  return "unknown";
+}
+
 }  // namespace stillshed

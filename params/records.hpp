@@ -18,6 +18,7 @@ struct Sourced {
   double value = 0.0;
   std::string source;  ///< key in sources.json
   std::string note;
+  friend bool operator==(const Sourced&, const Sourced&) = default;
 };
 
 /// Vapour-pressure equations, T in K, P in Pa (formulas in models/vapour_pressure.hpp).
@@ -42,17 +43,21 @@ struct PressureSet {
   std::string where;   ///< table or equation in the source
   bool estimated = false;
   std::string note;
+  friend bool operator==(const PressureSet&, const PressureSet&) = default;
 };
 
 /// How a component falls apart into groups of one group-contribution table.
 struct GroupCount {
   int subgroup = 0;
   int count = 0;
+  friend bool operator==(const GroupCount&, const GroupCount&) = default;
 };
 struct GroupAssignment {
   std::vector<GroupCount> groups;  ///< empty: no assignment, the model cannot treat this component
   bool approximate = false;
   std::string note;
+  std::vector<std::vector<GroupCount>> alternatives;  ///< other assignments with the same atoms; not used by default
+  friend bool operator==(const GroupAssignment&, const GroupAssignment&) = default;
 };
 
 /// One pure liquid.
@@ -83,6 +88,7 @@ struct ComponentRecord {
   std::string remarks;
   GroupAssignment unifac;    ///< original UNIFAC
   GroupAssignment dortmund;  ///< modified UNIFAC (Dortmund)
+  friend bool operator==(const ComponentRecord&, const ComponentRecord&) = default;
 };
 
 enum class GroupModel { unifac, dortmund };
@@ -94,6 +100,7 @@ struct Subgroup {
   std::string name;
   double R = 0.0;
   double Q = 0.0;
+  friend bool operator==(const Subgroup&, const Subgroup&) = default;
 };
 
 /// psi_mn = exp(-(a + b T + c T^2)/T), T in K, for the ordered pair of main groups m -> n.
@@ -101,6 +108,24 @@ struct GroupInteraction {
   double a_K = 0.0;
   double b = 0.0;
   double c_per_K = 0.0;
+  friend bool operator==(const GroupInteraction&, const GroupInteraction&) = default;
+};
+
+/// An earlier published value of a pair, kept to reproduce older worked examples.
+struct SupersededInteraction {
+  int m = 0;
+  int n = 0;
+  GroupInteraction mn;
+  GroupInteraction nm;
+  std::string edition;  ///< until when it stood
+  friend bool operator==(const SupersededInteraction&, const SupersededInteraction&) = default;
+};
+
+/// A doubt about a published value, or how it is read.
+struct TableNote {
+  std::string where;
+  std::string note;
+  friend bool operator==(const TableNote&, const TableNote&) = default;
 };
 
 /// One published group-contribution table. A pair that is absent has no parameters: never zero.
@@ -112,6 +137,13 @@ struct GroupTable {
   std::map<int, Subgroup> subgroups;
   std::map<std::pair<int, int>, GroupInteraction> interactions;  ///< key (m, n), both orders stored, m != n
   std::vector<std::string> sources;
+  std::optional<double> recommended_low_K;  ///< empty: no range recommended
+  std::optional<double> recommended_high_K;
+  std::map<std::pair<int, int>, int> classes;  ///< key (m, n), m < n: when the value was published, see class_texts
+  std::map<int, std::string> class_texts;
+  std::vector<SupersededInteraction> superseded;
+  std::vector<TableNote> notes;
+  friend bool operator==(const GroupTable&, const GroupTable&) = default;
 };
 
 enum class AzeotropeKind { none, minimum, maximum, saddle, heterogeneous_minimum };
@@ -121,21 +153,130 @@ enum class AzeotropeKind { none, minimum, maximum, saddle, heterogeneous_minimum
 struct MeasuredAzeotrope {
   std::string id;
   char tier = 'C';                      ///< A read in print, B/C from memory, D doubtful
-  std::vector<std::string> components;  ///< component ids
+  std::vector<std::string> components;  ///< component ids, or ids of Facts::other_substances
   AzeotropeKind kind = AzeotropeKind::none;
-  double pressure_Pa = 101325.0;
+  double pressure_Pa = 0.0;  ///< 0: not stated (isothermal measurement)
   std::optional<double> temperature_K;
   std::vector<double> mole_fractions;  ///< same order as components; empty when not given
   bool heterogeneous = false;
   std::string source;  ///< citation text
-  std::string record;  ///< "read in print (...)" or "from memory"
+  std::string record;  ///< "read in print" or "from memory"
   std::string note;
+  std::string source_key;  ///< key in sources.json
+  std::string printed;     ///< the value as printed, e.g. "95.5 wt% ethanol"
+  std::string confidence;  ///< of the memory: "high" or "medium"; empty when read in print
+  friend bool operator==(const MeasuredAzeotrope&, const MeasuredAzeotrope&) = default;
+};
+
+/// A substance that measured azeotropes name and that has no component record.
+struct OtherSubstance {
+  std::string id;
+  std::string name;
+  std::string cas;
+  double molar_mass_g_mol = 0.0;
+  friend bool operator==(const OtherSubstance&, const OtherSubstance&) = default;
+};
+
+/// A name in use for several substances, or for none that is pure: refused, with the choices.
+struct AmbiguousName {
+  std::string name;                  ///< as people write it
+  std::vector<std::string> choices;  ///< component ids
+  std::string why;
+  friend bool operator==(const AmbiguousName&, const AmbiguousName&) = default;
+};
+
+/// What brings a caution up. The caller knows the case; the record only names the condition.
+enum class CautionTrigger {
+  always,
+  substance,     ///< one of `substances` or a component with one of `hazards` is in the feed or added
+  hazard,        ///< the same, by hazard flag alone
+  pair,          ///< one of `substances` together with one of `with`
+  declared,      ///< the user declares the history named in `note` (and one of `substances` is present)
+  near_dry,      ///< recovery above 95 % of the charge, or residue below 5 %
+  unknowns,      ///< unknown components above 1 %, or history unknown
+  low_ignition,  ///< as substance: autoignition to be compared with heated surfaces
+  flash_point,   ///< a flash point below the working temperature
+  region,        ///< the user's legal region, in `note`
+  use,           ///< the intended use, in `note`
+  pressure,      ///< pressure above 1 bar
+  vacuum,        ///< pressure below 1 bar
+  two_liquids,   ///< the feed or the pot splits
+  extrapolated,  ///< the model is used outside its data
+};
+[[nodiscard]] const char* to_string(CautionTrigger trigger);
+
+struct CautionRecord {
+  std::string code;  ///< "C1".."C24"; several records may share a code
+  CautionTrigger trigger = CautionTrigger::always;
+  bool above_verdict = false;  ///< printed above the verdict, never collapsed
+  std::string text;
+  std::vector<std::string> substances;  ///< component ids
+  std::vector<std::string> with;        ///< component ids, trigger `pair`
+  std::vector<std::string> hazards;     ///< hazard flags
+  std::vector<std::string> sources;     ///< keys in sources.json
+  std::string note;
+  friend bool operator==(const CautionRecord&, const CautionRecord&) = default;
+};
+
+/// Limit of a residual solvent in medicines (ICH Q3C).
+struct ResidualLimit {
+  std::string name;
+  std::string component;  ///< component id; empty: not on file
+  std::string cas;
+  std::string solvent_class;  ///< "1", "2", "3" or "no adequate data"
+  std::optional<double> pde_mg_per_day;
+  std::optional<double> limit_ppm;  ///< option 1
+  std::string status;               ///< how the row was checked
+  std::string note;
+  std::string source;  ///< key in sources.json
+  friend bool operator==(const ResidualLimit&, const ResidualLimit&) = default;
+};
+
+/// A published or closed-form value that the program recomputes on the user's machine.
+enum class CheckKind { activity, boiling_point, fenske, azeotropes };
+[[nodiscard]] const char* to_string(CheckKind kind);
+
+struct CheckAzeotrope {
+  std::vector<std::string> components;
+  std::vector<double> mole_fractions;
+  double temperature_K = 0.0;
+  friend bool operator==(const CheckAzeotrope&, const CheckAzeotrope&) = default;
+};
+
+struct CheckValue {
+  std::string id;
+  CheckKind kind = CheckKind::activity;
+  std::string source;  ///< key in sources.json
+  std::string note;
+  std::vector<double> expected;  ///< gammas; boiling point [K]; stages
+  double tolerance = 0.0;        ///< absolute, in the unit of `expected` (mole fraction and K for azeotropes)
+  double relative_tolerance = 0.0;
+  // activity
+  std::string model;  ///< "unifac", "unifac-dortmund" or "nrtl"
+  std::vector<std::string> names;
+  std::vector<std::vector<GroupCount>> groups;
+  std::vector<std::vector<double>> tau;               ///< NRTL, row i = component i
+  std::vector<std::vector<double>> alpha;             ///< NRTL
+  std::vector<std::pair<int, int>> superseded_pairs;  ///< of main groups: take the value from GroupTable::superseded
+  double temperature_K = 0.0;
+  std::vector<double> mole_fractions;
+  // boiling_point
+  std::string component;
+  double pressure_Pa = 0.0;
+  // fenske: stages at total reflux for a symmetrical split, N = ln[(p/(1-p))^2] / ln(relative volatility)
+  double relative_volatility = 0.0;
+  double purity = 0.0;
+  // azeotropes
+  std::string case_json;  ///< a case file; its survey must find exactly these
+  std::vector<CheckAzeotrope> azeotropes;
+  friend bool operator==(const CheckValue&, const CheckValue&) = default;
 };
 
 struct Source {
   std::string key;
   std::string citation;
   std::string note;
+  friend bool operator==(const Source&, const Source&) = default;
 };
 
 /// Everything on file.
@@ -145,9 +286,15 @@ struct Facts {
   GroupTable dortmund;
   std::vector<MeasuredAzeotrope> measured_azeotropes;
   std::map<std::string, Source> sources;
-  /// Names that mean several substances: lower-case name -> component ids to choose from.
-  std::map<std::string, std::vector<std::string>> ambiguous_names;
+  std::vector<OtherSubstance> other_substances;
+  /// Normalised name (params/catalog.hpp) -> what it may mean.
+  std::map<std::string, AmbiguousName> ambiguous_names;
+  std::vector<CautionRecord> cautions;
+  std::string caution_closing;  ///< the sentence that ends every list of cautions
+  std::vector<ResidualLimit> residual_limits;
+  std::vector<CheckValue> check_values;
   std::string sha256;  ///< of the parameter files these facts were read from
+  friend bool operator==(const Facts&, const Facts&) = default;
 };
 
 }  // namespace stillshed
