@@ -33,7 +33,8 @@ inline constexpr int kMaxSites = kMaxTerms;
 template <class S, int Columns>
 class SiteTable {
  public:
-  SiteTable(int rows, int columns) : data_(rows * columns), columns_(columns) {}
+  /// Entries are to be written before they are read.
+  SiteTable(int rows, int columns) : data_(rows * columns, for_overwrite), columns_(columns) {}
   S& operator()(int k, int i) { return data_.data()[k * columns_ + i]; }
   const S& operator()(int k, int i) const { return data_.data()[k * columns_ + i]; }
   S* row(int k) { return data_.data() + k * columns_; }
@@ -70,10 +71,11 @@ class GroupCore {
 
   template <class S>
   [[nodiscard]] Vec<S> combinatorial(const Vec<S>& x) const {
+    expect_size(x, size());
     using std::log;
     const int n = size();
     const Sums<S> s = sums(x);
-    Vec<S> result(n);
+    Vec<S> result(n, for_overwrite);
     const S ln_R = log(s.R);
     const S ln_Rp = exponent_ == 1.0 ? ln_R : log(s.Rp);
     const S ln_E_over_R = log(s.E_over_R);
@@ -89,23 +91,25 @@ class GroupCore {
 
   template <class S>
   [[nodiscard]] Vec<S> residual(const SitePsi<S>& psi, const Vec<S>& x) const {
+    expect_size(x, size());
     const Sites<S> t(*this, psi, x);
-    Vec<S> result(size());
+    Vec<S> result(size(), for_overwrite);
     residual(t, result);
     return result;
   }
 
   template <class S>
   void ln_gamma_with_gradient(const SitePsi<S>& psi, const Vec<S>& x, LnGammaGradient<S>& out) const {
+    expect_size(x, size());
     const Sites<S> t(*this, psi, x);
     const int n = size();
     out.value = combinatorial(x);
-    Vec<S> rest(n);
+    Vec<S> rest(n, for_overwrite);
     residual(t, rest);
     for (int i = 0; i < n; ++i) {
       out.value[i] += rest[i];
     }
-    out.d_dx = Matrix<S>(n);
+    out.d_dx = Matrix<S>(n, for_overwrite);
     combinatorial_gradient(x, out.d_dx);
     residual_gradient(t, x, out.d_dx);
     out.d_dT = Vec<S>(n, S(0.0));
@@ -133,8 +137,8 @@ class GroupCore {
   template <class S>
   [[nodiscard]] Sums<S> sums(const Vec<S>& x) const {
     const int n = size();
-    Vec<S> r(n);
-    Vec<S> q(n);
+    Vec<S> r(n, for_overwrite);
+    Vec<S> q(n, for_overwrite);
     Sums<S> s;
     for (int i = 0; i < n; ++i) {
       r[i] = S(r_[i]);
@@ -157,8 +161,8 @@ class GroupCore {
   void combinatorial_gradient(const Vec<S>& x, Matrix<S>& d) const {
     const int n = size();
     const Sums<S> s = sums(x);
-    Vec<S> one_minus_v(n);
-    Vec<S> one_minus_y(n);
+    Vec<S> one_minus_v(n, for_overwrite);
+    Vec<S> one_minus_y(n, for_overwrite);
     for (int i = 0; i < n; ++i) {
       one_minus_v[i] = 1.0 - constant<S>(rp_[i]) / s.Rp;
       one_minus_y[i] = 1.0 - constant<S>(r_over_q_[i]) * s.E_over_R;
@@ -191,7 +195,7 @@ class GroupCore {
   template <class S>
   void residual_gradient(const Sites<S>& t, const Vec<S>& x, Matrix<S>& d) const {
     const int n = size();
-    Vec<S> column(n);
+    Vec<S> column(n, for_overwrite);
     for (int i = 0; i < n; ++i) {
       column[i] = constant<S>(A_[i]);
     }
@@ -201,7 +205,7 @@ class GroupCore {
         d(i, j) += constant<S>(A_[i]) * (constant<S>(A_[j]) * inverse_A);
       }
     }
-    Vec<S> share(n);
+    Vec<S> share(n, for_overwrite);
     for (int k = 0; k < sites_; ++k) {
       const S inverse_S = 1.0 / simplex_sum(x.begin(), t.s.row(k), n);
       for (int i = 0; i < n; ++i) {
@@ -223,8 +227,8 @@ class GroupCore {
   template <class S>
   void temperature_slope(const SitePsi<S>& psi, const Sites<S>& t, const Vec<S>& x, Vec<S>& out) const {
     const int n = size();
-    Vec<S> weight(n);
-    Vec<S> ln_slope(n);  // s'_ki / s_ki: a mean of the slopes of psi
+    Vec<S> weight(n, for_overwrite);
+    Vec<S> ln_slope(n, for_overwrite);  // s'_ki / s_ki: a mean of the slopes of psi
     std::array<S, kMaxSites> part;
     std::array<S, kMaxSites> slope;
     for (int k = 0; k < sites_; ++k) {
@@ -273,13 +277,19 @@ class GroupCore {
 
 template <class S>
 GroupCore::Sites<S>::Sites(const GroupCore& core, const SitePsi<S>& psi, const Vec<S>& x)
-    : s(core.sites_, core.size()), ln_term(core.sites_, core.size()), excess(core.sites_, core.size()), h(core.sites_, 1) {
+    : s(core.sites_, core.size()),
+      ln_term(core.sites_, core.size()),
+      excess(core.sites_, core.size()),
+      h(core.sites_, 1) {
   using std::log;
   const int n = core.size();
-  Vec<S> total(n);
-  Vec<S> column(n);
+  Vec<S> total(n, for_overwrite);
+  Vec<S> column(n, for_overwrite);
   for (int i = 0; i < n; ++i) {
     total[i] = constant<S>(core.A_[i]);
+    for (int k = 0; k < core.sites_; ++k) {
+      s(k, i) = S(0.0);
+    }
     for (const Area& area : core.areas(i)) {
       for (int k = 0; k < core.sites_; ++k) {
         s(k, i) += area.a * psi.psi(area.site, k);

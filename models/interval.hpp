@@ -1,6 +1,7 @@
 /// Outward-rounded intervals: every operation encloses the exact result for all points of its operands.
 ///
-/// Rounding   A computed end point m becomes m -+ (|m| * 2.3e-16 + 1e-300). The rounding of the operation and that of the
+/// Rounding   A computed end point m becomes m -+ (|m| * 2.3e-16 + 1e-300). The rounding of the operation and that of
+/// the
 ///            step itself are at most 2^-53 |m| = 1.11e-16 |m| each (plus a denormal where m underflows), so the step
 ///            covers both. The guard is a normal number: a bound of 5e-324 would drag every later product into slow
 ///            denormal arithmetic. No rounding-mode switches; the build uses -ffp-contract=off. exp, log and pow are
@@ -70,9 +71,7 @@ class Interval {
   Interval& operator/=(const Interval& other);
 
   /// Outward rounding of computed end points; NaN, overflow or wrong order give the whole line.
-  [[nodiscard]] static Interval outward(double lower, double upper) {
-    return widened(lower, upper, kStep);
-  }
+  [[nodiscard]] static Interval outward(double lower, double upper) { return widened(lower, upper, kStep); }
   /// The same for results of exp, log and pow.
   [[nodiscard]] static Interval outward_elementary(double lower, double upper) {
     return widened(lower, upper, kElementaryUlp * std::numeric_limits<double>::epsilon());
@@ -105,17 +104,18 @@ class Interval {
 
 // --- arithmetic ---------------------------------------------------------------------------------------------------
 
-inline Interval operator+(const Interval& a) { return a; }
+inline Interval operator+(const Interval& a) {
+  return a;
+}
 inline Interval operator+(const Interval& a, const Interval& b) {
   return Interval::outward(a.lower() + b.lower(), a.upper() + b.upper());
 }
 inline Interval operator-(const Interval& a, const Interval& b) {
   return Interval::outward(a.lower() - b.upper(), a.upper() - b.lower());
 }
-inline Interval operator*(const Interval& a, const Interval& b) {
-  if (a.lower() >= 0.0 && b.lower() >= 0.0) {  // the common case: fractions times positive numbers; exact zeros stay
-    return Interval::outward(a.lower() * b.lower(), a.upper() * b.upper()).not_negative();
-  }
+namespace interval_detail {
+/// Any signs: the extreme of four products. Out of line: fractions and positive numbers do not come here.
+[[nodiscard]] inline Interval multiply_any(const Interval& a, const Interval& b) {
   const double p = a.lower() * b.lower();
   const double q = a.lower() * b.upper();
   const double r = a.upper() * b.lower();
@@ -126,6 +126,14 @@ inline Interval operator*(const Interval& a, const Interval& b) {
     }
   }
   return Interval::outward(std::min(std::min(p, q), std::min(r, s)), std::max(std::max(p, q), std::max(r, s)));
+}
+}  // namespace interval_detail
+
+inline Interval operator*(const Interval& a, const Interval& b) {
+  if (a.lower() >= 0.0 && b.lower() >= 0.0) {  // exact zeros stay
+    return Interval::outward(a.lower() * b.lower(), a.upper() * b.upper()).not_negative();
+  }
+  return interval_detail::multiply_any(a, b);
 }
 inline Interval operator/(const Interval& a, const Interval& b) {
   if (b.lower() > 0.0) {
@@ -138,10 +146,18 @@ inline Interval operator/(const Interval& a, const Interval& b) {
   return b.upper() < 0.0 ? (-a) / (-b) : Interval::whole();
 }
 
-inline Interval operator+(const Interval& a, double b) { return Interval::outward(a.lower() + b, a.upper() + b); }
-inline Interval operator+(double a, const Interval& b) { return b + a; }
-inline Interval operator-(const Interval& a, double b) { return Interval::outward(a.lower() - b, a.upper() - b); }
-inline Interval operator-(double a, const Interval& b) { return Interval::outward(a - b.upper(), a - b.lower()); }
+inline Interval operator+(const Interval& a, double b) {
+  return Interval::outward(a.lower() + b, a.upper() + b);
+}
+inline Interval operator+(double a, const Interval& b) {
+  return b + a;
+}
+inline Interval operator-(const Interval& a, double b) {
+  return Interval::outward(a.lower() - b, a.upper() - b);
+}
+inline Interval operator-(double a, const Interval& b) {
+  return Interval::outward(a - b.upper(), a - b.lower());
+}
 inline Interval operator*(const Interval& a, double b) {
   if (b >= 0.0) {
     const Interval product = Interval::outward(a.lower() * b, a.upper() * b);
@@ -149,14 +165,28 @@ inline Interval operator*(const Interval& a, double b) {
   }
   return Interval::outward(a.upper() * b, a.lower() * b);
 }
-inline Interval operator*(double a, const Interval& b) { return b * a; }
-inline Interval operator/(const Interval& a, double b) { return a / Interval(b); }
-inline Interval operator/(double a, const Interval& b) { return Interval(a) / b; }
+inline Interval operator*(double a, const Interval& b) {
+  return b * a;
+}
+inline Interval operator/(const Interval& a, double b) {
+  return a / Interval(b);
+}
+inline Interval operator/(double a, const Interval& b) {
+  return Interval(a) / b;
+}
 
-inline Interval& Interval::operator+=(const Interval& other) { return *this = *this + other; }
-inline Interval& Interval::operator-=(const Interval& other) { return *this = *this - other; }
-inline Interval& Interval::operator*=(const Interval& other) { return *this = *this * other; }
-inline Interval& Interval::operator/=(const Interval& other) { return *this = *this / other; }
+inline Interval& Interval::operator+=(const Interval& other) {
+  return *this = *this + other;
+}
+inline Interval& Interval::operator-=(const Interval& other) {
+  return *this = *this - other;
+}
+inline Interval& Interval::operator*=(const Interval& other) {
+  return *this = *this * other;
+}
+inline Interval& Interval::operator/=(const Interval& other) {
+  return *this = *this / other;
+}
 
 // --- elementary functions -----------------------------------------------------------------------------------------
 
@@ -194,10 +224,14 @@ inline Interval pow(const Interval& a, double exponent) {
   return Interval::outward_elementary(std::pow(a.lower(), exponent), std::pow(a.upper(), exponent)).not_negative();
 }
 
-inline double square(double a) { return a * a; }
+inline double square(double a) {
+  return a * a;
+}
 
 /// x ln x, continued by 0 at 0.
-inline double xlogx(double x) { return x > 0.0 ? x * std::log(x) : 0.0; }
+inline double xlogx(double x) {
+  return x > 0.0 ? x * std::log(x) : 0.0;
+}
 /// Exact range: falls to -1/e at x = 1/e, rises after it.
 inline Interval xlogx(const Interval& x) {
   if (!(x.lower() >= 0.0)) {

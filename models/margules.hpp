@@ -25,6 +25,7 @@ class Margules {
 
   template <class S>
   [[nodiscard]] Vec<S> ln_gamma(const S& /*temperature_K*/, const Vec<S>& x) const {
+    expect_size(x, size());
     const int n = size();
     Vec<S> row(n);
     S half(0.0);
@@ -43,6 +44,7 @@ class Margules {
 
   template <class S>
   void ln_gamma_with_gradient(const S& /*temperature_K*/, const Vec<S>& x, LnGammaGradient<S>& out) const {
+    expect_size(x, size());
     const int n = size();
     Vec<S> row(n);
     S half(0.0);

@@ -1,8 +1,8 @@
 /// Sums and means over mole fractions, written once per scalar so that one template gives tight intervals.
 ///
 ///   weighted_mean(w, v) = sum_i w_i v_i / sum_i w_i     w_i >= 0, not all zero
-///   ratio_of_sums(x, u, s) = sum_i x_i u_i / sum_i x_i s_i     x_i >= 0, s_i > 0: the mean of u_i/s_i with weights x_i s_i
-///   simplex_sum(x, v)   = sum_i x_i v_i                 for mole fractions x, sum(x) = 1
+///   ratio_of_sums(x, u, s) = sum_i x_i u_i / sum_i x_i s_i     x_i >= 0, s_i > 0: the mean of u_i/s_i with weights x_i
+///   s_i simplex_sum(x, v)   = sum_i x_i v_i                 for mole fractions x, sum(x) = 1
 ///
 /// Interval  `weighted_mean` is the range over all weights and values of the box: the largest value is reached with
 ///           every weight at an end point, upper for the values above the mean, lower below (a linear-fractional
@@ -96,28 +96,30 @@ inline double largest_mean(const Interval* w, const Values& value, int n) {
   return denominator > kSmallestTotal ? numerator / denominator : std::numeric_limits<double>::quiet_NaN();
 }
 
-/// Largest sum x_i value_i over the points of the box with sum(x) = 1: every x at its lower end, what is left of the
-/// unit goes to the largest values first.
-inline double largest_sum(const Interval* x, const Values& value, double left, int n) {
-  Order order;
-  sort_falling(value, n, order);
-  double sum = 0.0;
-  for (int i = 0; i < n; ++i) {
-    sum += x[i].lower() * value[static_cast<std::size_t>(i)];
+/// Least upper bound of sum x_i value_i over the points of the box with sum(x) = 1. By linear programming duality that
+/// is the smallest, over the values v_k, of v_k + sum_i (value_i - v_k) x_i with each x_i at its worse end; every
+/// single k gives a bound, so nothing rests on which is chosen.
+inline double largest_sum(const Interval* x, const Values& value, int n) {
+  double least = std::numeric_limits<double>::infinity();
+  for (int k = 0; k < n; ++k) {
+    const double level = value[static_cast<std::size_t>(k)];
+    double bound = level;
+    for (int i = 0; i < n; ++i) {
+      const double above = value[static_cast<std::size_t>(i)] - level;
+      bound += std::max(above * x[i].lower(), above * x[i].upper());
+    }
+    least = std::min(least, bound);
   }
-  for (int k = 0; k < n && left > 0.0; ++k) {
-    const int i = order[static_cast<std::size_t>(k)];
-    const double take = std::min(left, x[i].upper() - x[i].lower());
-    sum += take * value[static_cast<std::size_t>(i)];
-    left -= take;
-  }
-  return sum;
+  return least;
 }
 
-/// Covers the rounding of the two functions above: fewer than 4 n + 4 operations, each on numbers that are at most
-/// max|v| times the total weight.
-inline double slack(double largest, int n) {
+/// Covers the rounding of largest_mean: fewer than 4 n + 4 roundings, each of a number at most max|v| times the weight.
+inline double mean_slack(double largest, int n) {
   return largest * (8.0 * n + 8.0) * std::numeric_limits<double>::epsilon() + 1e-300;
+}
+/// Covers the rounding of largest_sum for |x| <= 2: 3 n roundings of numbers at most (4 n + 1) max|v|.
+inline double sum_slack(double largest, int n) {
+  return largest * (6.0 * n * (n + 1.0)) * std::numeric_limits<double>::epsilon() + 1e-300;
 }
 
 }  // namespace means
@@ -136,7 +138,7 @@ inline Interval weighted_mean(const Interval* w, const Interval* v, int n) {
     lowest = std::min(lowest, v[i].lower());
     highest = std::max(highest, v[i].upper());
   }
-  const double room = means::slack(std::max(-lowest, highest), n);
+  const double room = means::mean_slack(std::max(-lowest, highest), n);
   const double upper = means::largest_mean(w, up, n) + room;
   const double lower = -means::largest_mean(w, down, n) - room;
   // Whatever the weights, a mean lies between the smallest and the largest value; a NaN falls back to that.
@@ -144,7 +146,6 @@ inline Interval weighted_mean(const Interval* w, const Interval* v, int n) {
 }
 
 inline Interval simplex_sum(const Interval* x, const Interval* v, int n) {
-  Interval plain(0.0);
   double low_sum = 0.0;
   double high_sum = 0.0;
   double largest = 0.0;
@@ -152,21 +153,23 @@ inline Interval simplex_sum(const Interval* x, const Interval* v, int n) {
   means::Values up;
   means::Values down;
   for (int i = 0; i < n; ++i) {
-    usable = usable && x[i].lower() >= 0.0 && x[i].is_bounded() && v[i].is_bounded();
-    plain += x[i] * v[i];
     low_sum += x[i].lower();
     high_sum += x[i].upper();
+    usable = usable && x[i].magnitude() <= 2.0;
     up[static_cast<std::size_t>(i)] = v[i].upper();
     down[static_cast<std::size_t>(i)] = -v[i].lower();
     largest = std::max(largest, v[i].magnitude());
   }
-  if (!usable || !(low_sum <= 1.0 && high_sum >= 1.0)) {  // the box misses the simplex: make no use of it
+  constexpr double kRounding = 1e-14;  // of mole fractions that were meant to add up to 1
+  if (!usable || !(low_sum <= 1.0 + kRounding && high_sum >= 1.0 - kRounding) || !(largest < 1e300)) {
+    Interval plain(0.0);  // the box misses the simplex, or something is unbounded: make no use of sum(x) = 1
+    for (int i = 0; i < n; ++i) {
+      plain += x[i] * v[i];
+    }
     return plain;
   }
-  const double room = means::slack(largest, n);
-  const double upper = means::largest_sum(x, up, 1.0 - low_sum, n) + room;
-  const double lower = -means::largest_sum(x, down, 1.0 - low_sum, n) - room;
-  return both(plain, Interval(lower, upper));
+  const double room = means::sum_slack(largest, n);
+  return {-means::largest_sum(x, down, n) - room, means::largest_sum(x, up, n) + room};
 }
 
 inline Interval ratio_of_sums(const Interval* x, const Interval* u, const Interval* s, int n) {
@@ -183,7 +186,9 @@ inline Interval ratio_of_sums(const Interval* x, const Interval* u, const Interv
 inline Interval fraction_part(const Interval& x) {
   return x.upper() >= 0.0 && x.lower() <= 1.0 ? both(x, Interval(0.0, 1.0)) : x;
 }
-inline double fraction_part(double x) { return x; }
+inline double fraction_part(double x) {
+  return x;
+}
 template <class S, int N>
 ceres::Jet<S, N> fraction_part(const ceres::Jet<S, N>& x) {
   ceres::Jet<S, N> part = x;

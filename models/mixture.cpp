@@ -25,7 +25,9 @@ Vec<S> on_simplex(const Vec<S>& x) {
   }
   return part;
 }
-const Vec<double>& on_simplex(const Vec<double>& x) { return x; }
+const Vec<double>& on_simplex(const Vec<double>& x) {
+  return x;
+}
 
 }  // namespace
 
@@ -134,7 +136,8 @@ STILLSHED_INSTANTIATE(Interval);
 STILLSHED_INSTANTIATE(Jet4);
 STILLSHED_INSTANTIATE(IntervalJet4);
 #undef STILLSHED_INSTANTIATE
-template void Mixture::ln_gamma_with_gradient<double>(const double&, const Vec<double>&, LnGammaGradient<double>&) const;
+template void Mixture::ln_gamma_with_gradient<double>(const double&, const Vec<double>&,
+                                                      LnGammaGradient<double>&) const;
 template void Mixture::ln_gamma_with_gradient<Interval>(const Interval&, const Vec<Interval>&,
                                                         LnGammaGradient<Interval>&) const;
 template void Mixture::ln_k_with_gradient<double>(const double&, const Vec<double>&, double,

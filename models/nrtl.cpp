@@ -30,6 +30,7 @@ Nrtl::Nrtl(const NrtlParameters& parameters) : p_(parameters) {
     throw InputError(problems);
   }
   depends_on_temperature_ = p_.tau.depends_on_temperature();
+  uses_ln_T_ = p_.tau.uses_ln_T();
   constant_G_ = Matrix<Enclosed>(n);
   for (int i = 0; i < n; ++i) {
     for (int j = 0; j < n; ++j) {

@@ -41,21 +41,23 @@ class Nrtl {
 
   template <class S>
   [[nodiscard]] Vec<S> ln_gamma(const S& temperature_K, const Vec<S>& x) const {
+    expect_size(x, size());
     const Terms<S> t(*this, temperature_K, x);
-    Vec<S> result(size());
+    Vec<S> result(size(), for_overwrite);
     values(t, x, result);
     return result;
   }
 
   template <class S>
   void ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& x, LnGammaGradient<S>& out) const {
+    expect_size(x, size());
     const Terms<S> t(*this, temperature_K, x);
     const int n = size();
-    out.value = Vec<S>(n);
-    out.d_dx = Matrix<S>(n);
-    out.d_dT = Vec<S>(n, S(0.0));
+    out.value = Vec<S>(n, for_overwrite);
+    out.d_dx = Matrix<S>(n, for_overwrite);
+    out.d_dT = Vec<S>(n);
     values(t, x, out.value);
-    Vec<S> row(n);
+    Vec<S> row(n, for_overwrite);
     for (int i = 0; i < n; ++i) {
       for (int k = 0; k <= i; ++k) {
         for (int j = 0; j < n; ++j) {
@@ -76,11 +78,11 @@ class Nrtl {
   struct Terms {
     Terms(const Nrtl& model, const S& temperature_K, const Vec<S>& x)
         : T(temperature_K),
-          tau_to(model.size()),
-          G_to(model.size()),
-          g(model.size()),
-          e(model.size()),
-          M(model.size()) {
+          tau_to(model.size(), for_overwrite),
+          G_to(model.size(), for_overwrite),
+          g(model.size(), for_overwrite),
+          e(model.size(), for_overwrite),
+          M(model.size(), for_overwrite) {
       model.pairs(*this);
       model.means(x, *this);
     }
@@ -105,10 +107,11 @@ class Nrtl {
       }
       return;
     }
-    const PairTemperature<S> shared = p_.tau.temperature(t.T);
+    const PairTemperature<S> shared = p_.tau.temperature(t.T, uses_ln_T_);
     for (int i = 0; i < n; ++i) {
       for (int j = 0; j < n; ++j) {
         if (i == j) {
+          t.tau_to(j, i) = S(0.0);
           t.G_to(j, i) = S(1.0);
           continue;
         }
@@ -131,7 +134,7 @@ class Nrtl {
   template <class S>
   void means(const Vec<S>& x, Terms<S>& t) const {
     const int n = size();
-    Vec<S> weight(n);
+    Vec<S> weight(n, for_overwrite);
     for (int j = 0; j < n; ++j) {
       for (int k = 0; k < n; ++k) {
         weight[k] = x[k] * t.G_to(j, k);
@@ -147,8 +150,9 @@ class Nrtl {
 
   template <class S>
   void values(const Terms<S>& t, const Vec<S>& x, Vec<S>& result) const {
-    for (int i = 0; i < size(); ++i) {
-      result[i] = t.M[i] + simplex_sum(x.begin(), t.e.row(i), size());
+    const int n = x.size();
+    for (int i = 0; i < n; ++i) {
+      result[i] = t.M[i] + simplex_sum(x.begin(), t.e.row(i), n);
     }
   }
 
@@ -156,13 +160,13 @@ class Nrtl {
   template <class S>
   void temperature_slopes(const Terms<S>& t, const Vec<S>& x, Vec<S>& out) const {
     const int n = size();
-    const PairTemperature<S> shared = p_.tau.temperature(t.T);
+    const PairTemperature<S> shared = p_.tau.temperature(t.T, uses_ln_T_);
     Matrix<S> dtau_to(n);
     Matrix<S> dlnG_to(n);
-    Vec<S> dM(n);
-    Vec<S> dlnD(n);
-    Vec<S> weight(n);
-    Vec<S> column(n);
+    Vec<S> dM(n, for_overwrite);
+    Vec<S> dlnD(n, for_overwrite);
+    Vec<S> weight(n, for_overwrite);
+    Vec<S> column(n, for_overwrite);
     for (int j = 0; j < n; ++j) {
       for (int k = 0; k < n; ++k) {
         if (k != j) {
@@ -186,6 +190,7 @@ class Nrtl {
   NrtlParameters p_;
   Matrix<Enclosed> constant_G_;  ///< exp(-alpha tau), used when nothing depends on T
   bool depends_on_temperature_ = false;
+  bool uses_ln_T_ = false;
 };
 
 }  // namespace stillshed

@@ -36,12 +36,12 @@ struct PairParameters {
   /// Bad entries: NaN, unequal sizes, a diagonal that is not zero.
   [[nodiscard]] std::vector<Problem> problems(const std::string& model) const;
 
-  /// The functions of temperature that every entry shares.
+  /// The functions of temperature that every entry shares; a model remembers uses_ln_T() to spare a logarithm.
   template <class S>
-  [[nodiscard]] PairTemperature<S> temperature(const S& temperature_K) const {
+  [[nodiscard]] static PairTemperature<S> temperature(const S& temperature_K, bool with_ln_T) {
     using std::log;
     PairTemperature<S> t{temperature_K, 1.0 / temperature_K, S(0.0)};
-    if (uses_ln_T()) {
+    if (with_ln_T) {
       t.ln_T = log(temperature_K);
     }
     return t;

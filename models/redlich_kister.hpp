@@ -36,6 +36,7 @@ class RedlichKister {
 
   template <class S>
   [[nodiscard]] Vec<S> ln_gamma(const S& /*temperature_K*/, const Vec<S>& x) const {
+    expect_size(x, size());
     Vec<S> result(size_, S(0.0));
     for (const RedlichKisterPair& pair : pairs_) {
       const S& a = x[pair.i];
@@ -58,6 +59,7 @@ class RedlichKister {
 
   template <class S>
   void ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& x, LnGammaGradient<S>& out) const {
+    expect_size(x, size());
     out.value = ln_gamma(temperature_K, x);
     out.d_dx = Matrix<S>(size_, S(0.0));
     out.d_dT = Vec<S>(size_, S(0.0));

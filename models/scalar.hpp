@@ -22,6 +22,10 @@ namespace stillshed {
 /// Largest number of components of one mixture.
 inline constexpr int kMaxComponents = 12;
 
+/// Asks for entries without a value.
+struct ForOverwrite {};
+inline constexpr ForOverwrite for_overwrite{};
+
 /// Room for `Capacity` numbers of which only those in use are ever written: no heap, and no clearing of the rest
 /// (twelve jets of intervals are kilobytes).
 template <class S, int Capacity>
@@ -31,14 +35,17 @@ class FixedBuffer {
  public:
   FixedBuffer() {}  // NOLINT(modernize-use-equals-default): the union member stays unconstructed on purpose
   explicit FixedBuffer(int count) : count_(count) { std::uninitialized_value_construct_n(data_, count); }
-  FixedBuffer(int count, const S& value) : count_(count) { std::uninitialized_fill_n(data_, count, value); }
-  FixedBuffer(const FixedBuffer& other) : count_(other.count_) {
-    std::uninitialized_copy_n(other.data_, other.count_, data_);
+  /// Entries are to be written before they are read.
+  FixedBuffer(int count, ForOverwrite /*tag*/) : count_(count) {
+    if constexpr (!std::is_trivially_copyable_v<S>) {
+      std::uninitialized_default_construct_n(data_, count);
+    }
   }
+  FixedBuffer(int count, const S& value) : count_(count) { std::uninitialized_fill_n(data_, count, value); }
+  FixedBuffer(const FixedBuffer& other) { copy(other); }
   FixedBuffer& operator=(const FixedBuffer& other) {
     if (this != &other) {
-      count_ = other.count_;
-      std::uninitialized_copy_n(other.data_, other.count_, data_);
+      copy(other);
     }
     return *this;
   }
@@ -50,6 +57,12 @@ class FixedBuffer {
   void append(const S& value) { std::construct_at(data_ + count_++, value); }
 
  private:
+  void copy(const FixedBuffer& other) {
+    count_ = other.count_;
+    for (int i = 0; i < count_; ++i) {
+      std::construct_at(data_ + i, other.data_[i]);
+    }
+  }
   union {
     S data_[static_cast<std::size_t>(Capacity)];
   };
@@ -62,6 +75,7 @@ class Vec {
  public:
   Vec() = default;
   explicit Vec(int size) : data_(checked(size)) {}
+  Vec(int size, ForOverwrite tag) : data_(checked(size), tag) {}
   Vec(int size, const S& value) : data_(checked(size), value) {}
   Vec(std::initializer_list<S> values) {
     for (const S& value : values) {
@@ -107,12 +121,19 @@ using Composition = Vec<double>;
 /// Indices of the components that make up a face of the composition simplex, ascending.
 using Members = Vec<int>;
 
+/// A model's guard against a composition of another size: LogicError.
+template <class S>
+void expect_size(const Vec<S>& x, int size) {
+  expects(x.size() == size, "a composition whose size is not that of the model");
+}
+
 /// Square matrix of up to kMaxComponents rows, stored row by row; row i belongs to component i; new entries are zero.
 template <class S>
 class Matrix {
  public:
   Matrix() = default;
   explicit Matrix(int size) : data_(checked(size) * size), size_(size) {}
+  Matrix(int size, ForOverwrite tag) : data_(checked(size) * size, tag), size_(size) {}
   Matrix(int size, const S& value) : data_(checked(size) * size, value), size_(size) {}
   [[nodiscard]] int size() const { return size_; }
   S& operator()(int i, int j) { return data_.data()[i * size_ + j]; }

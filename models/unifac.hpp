@@ -77,6 +77,9 @@ class Unifac {
       for (int k = 0; k < core_.sites(); ++k) {
         if (m == k) {
           result.psi(m, k) = S(1.0);
+          if (with_slopes) {
+            result.ln_slope(m, k) = S(0.0);
+          }
           continue;
         }
         const GroupInteraction& p = interaction_[static_cast<std::size_t>(m)][static_cast<std::size_t>(k)];

@@ -37,6 +37,8 @@ Uniquac::Uniquac(const UniquacParameters& parameters) : p_(parameters) {
     throw InputError(problems);
   }
   core_ = make_core(p_);
+  depends_on_temperature_ = p_.ln_tau.depends_on_temperature();
+  uses_ln_T_ = p_.ln_tau.uses_ln_T();
 }
 
 Uniquac Uniquac::face(const Members& members) const {

@@ -27,7 +27,7 @@ class Uniquac {
   Uniquac() = default;
   explicit Uniquac(const UniquacParameters& parameters);
   [[nodiscard]] int size() const { return p_.r.size(); }
-  [[nodiscard]] bool depends_on_temperature() const { return p_.ln_tau.depends_on_temperature(); }
+  [[nodiscard]] bool depends_on_temperature() const { return depends_on_temperature_; }
   [[nodiscard]] Uniquac face(const Members& members) const;
   [[nodiscard]] const UniquacParameters& parameters() const { return p_; }
 
@@ -58,7 +58,7 @@ class Uniquac {
   [[nodiscard]] SitePsi<S> site_psi(const S& T, bool with_slopes) const {
     using std::exp;
     SitePsi<S> result(size(), with_slopes);
-    const PairTemperature<S> t = p_.ln_tau.temperature(T);
+    const PairTemperature<S> t = p_.ln_tau.temperature(T, uses_ln_T_);
     for (int i = 0; i < size(); ++i) {
       for (int j = 0; j < size(); ++j) {
         result.psi(i, j) = i == j ? S(1.0) : exp(p_.ln_tau.at(i, j, t));
@@ -72,6 +72,8 @@ class Uniquac {
 
   UniquacParameters p_;
   GroupCore core_;
+  bool depends_on_temperature_ = false;
+  bool uses_ln_T_ = false;
 };
 
 }  // namespace stillshed

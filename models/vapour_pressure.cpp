@@ -33,9 +33,15 @@ std::span<const WagnerTerm> wagner_terms(PressureForm form) {
     default: return {};
   }
 }
-bool is_wagner(PressureForm form) { return !wagner_terms(form).empty(); }
-double critical_K(const PressureSet& set) { return set.coefficients[wagner_terms(set.form).size()]; }
-double critical_Pa(const PressureSet& set) { return set.coefficients[wagner_terms(set.form).size() + 1]; }
+bool is_wagner(PressureForm form) {
+  return !wagner_terms(form).empty();
+}
+double critical_K(const PressureSet& set) {
+  return set.coefficients[wagner_terms(set.form).size()];
+}
+double critical_Pa(const PressureSet& set) {
+  return set.coefficients[wagner_terms(set.form).size() + 1];
+}
 
 std::size_t coefficient_count(PressureForm form) {
   switch (form) {
@@ -66,23 +72,31 @@ S real_power(const S& T, double k) {
 }
 
 /// t = 1 - T/Tc; never negative, because the range of the formula ends at Tc.
-double reduced(double T, double Tc) { return 1.0 - T / Tc; }
-Interval reduced(const Interval& T, double Tc) { return (1.0 - T / Tc).not_negative(); }
+double reduced(double T, double Tc) {
+  return 1.0 - T / Tc;
+}
+Interval reduced(const Interval& T, double Tc) {
+  return (1.0 - T / Tc).not_negative();
+}
 
 /// k t^(k-1) - (k-1) t^k for t in [0, 1]: rises with t, so the end points of an interval enclose it.
-double wagner_bracket(double t, double k) { return half_power(t, k - 1.0) * (1.0 + (k - 1.0) * (1.0 - t)); }
+double wagner_bracket(double t, double k) {
+  return half_power(t, k - 1.0) * (1.0 + (k - 1.0) * (1.0 - t));
+}
 Interval wagner_bracket(const Interval& t, double k) {
-  const auto at = [k](double end) { return half_power(Interval(end), k - 1.0) * (1.0 + (k - 1.0) * (1.0 - Interval(end))); };
+  const auto at = [k](double end) {
+    return half_power(Interval(end), k - 1.0) * (1.0 + (k - 1.0) * (1.0 - Interval(end)));
+  };
   return {at(t.lower()).lower(), at(std::min(t.upper(), 1.0)).upper()};
 }
 
-template <class S>
-S ln_of(double value) {
-  using std::log;
-  return log(S(value));
+Enclosed ln_of(double value) {
+  return {std::log(value), log(Interval(value))};
 }
 
-std::string name_of(const PressureSet& set) { return set.id.empty() ? "vapour pressure" : set.id; }
+std::string name_of(const PressureSet& set) {
+  return set.id.empty() ? "vapour pressure" : set.id;
+}
 
 }  // namespace
 
@@ -91,9 +105,9 @@ S PressureCurve::formula(const S& T) const {
   using std::log;
   const auto& c = set_.coefficients;
   switch (set_.form) {
-    case PressureForm::antoine_log10: return (c[0] - c[1] / (T + c[2])) * ln_of<S>(10.0);
+    case PressureForm::antoine_log10: return (c[0] - c[1] / (T + c[2])) * constant<S>(ln_10_);
     case PressureForm::perry_101: return c[0] + c[1] / T + c[2] * log(T) + c[3] * real_power(T, c[4]);
-    case PressureForm::clausius_clapeyron: return ln_of<S>(kAtmosphere_Pa) + c[1] * (1.0 / S(c[0]) - 1.0 / T);
+    case PressureForm::clausius_clapeyron: return constant<S>(ln_reference_) + c[1] * (1.0 / S(c[0]) - 1.0 / T);
     default: break;
   }
   const double Tc = critical_K(set_);
@@ -102,14 +116,14 @@ S PressureCurve::formula(const S& T) const {
   for (const WagnerTerm& term : wagner_terms(set_.form)) {
     sum += c[term.coefficient] * half_power(t, term.exponent);
   }
-  return (Tc / T) * sum + ln_of<S>(critical_Pa(set_));
+  return (Tc / T) * sum + constant<S>(ln_reference_);
 }
 
 template <class S>
 S PressureCurve::formula_slope(const S& T) const {
   const auto& c = set_.coefficients;
   switch (set_.form) {
-    case PressureForm::antoine_log10: return c[1] * ln_of<S>(10.0) / square(T + c[2]);
+    case PressureForm::antoine_log10: return c[1] * constant<S>(ln_10_) / square(T + c[2]);
     case PressureForm::perry_101: return (c[2] - c[1] / T + (c[3] * S(c[4])) * real_power(T, c[4])) / T;
     case PressureForm::clausius_clapeyron: return c[1] / square(T);
     default: break;
@@ -129,7 +143,7 @@ Interval PressureCurve::formula_curvature(const Interval& T) const {
   switch (set_.form) {
     case PressureForm::antoine_log10: {
       const Interval reach = T + c[2];
-      return (-2.0 * c[1]) * ln_of<Interval>(10.0) / (square(reach) * reach);
+      return (-2.0 * c[1]) * ln_10_.range / (square(reach) * reach);
     }
     case PressureForm::perry_101: {
       const Interval last = (Interval(c[3]) * c[4]) * ((Interval(c[4]) - 1.0) * real_power(T, c[4]));
@@ -157,6 +171,8 @@ Interval PressureCurve::formula_curvature(const Interval& T) const {
 
 PressureCurve::PressureCurve(PressureSet set) : set_(std::move(set)) {
   check_coefficients();
+  ln_10_ = ln_of(10.0);
+  ln_reference_ = ln_of(is_wagner(set_.form) ? critical_Pa(set_) : kAtmosphere_Pa);
   choose_range();
   certify_rising();
   certify_falling_slope();
@@ -205,7 +221,8 @@ void PressureCurve::choose_range() {
   low = set_.t_min_K.value_or(low);
   high = std::min(set_.t_max_K.value_or(high), is_wagner(set_.form) ? critical_K(set_) : kInfinity);
   if (!(low > 0.0) || !(low < high) || !std::isfinite(high)) {
-    throw InputError(Problem{name_of(set_), "temperature range " + std::to_string(low) + " to " + std::to_string(high) + " K",
+    throw InputError(Problem{name_of(set_),
+                             "temperature range " + std::to_string(low) + " to " + std::to_string(high) + " K",
                              "a positive lower end below a finite upper end", "check the record"});
   }
   low_.end_K = low;
@@ -262,23 +279,73 @@ bool PressureCurve::covers(double temperature_K) const {
   return (!set_.t_min_K || temperature_K >= *set_.t_min_K) && (!set_.t_max_K || temperature_K <= *set_.t_max_K);
 }
 
-template <class S>
-S PressureCurve::ln_psat_at(double T) const {
-  return T < low_.end_K ? low_.value(S(T)) : T > high_.end_K ? high_.value(S(T)) : formula(S(T));
-}
-template <class S>
-S PressureCurve::slope_at(double T) const {
-  return T < low_.end_K ? low_.slope(S(T)) : T > high_.end_K ? high_.slope(S(T)) : formula_slope(S(T));
+/// Bounds of |computed - exact| for formula(T) and formula_slope(T) in double, T in the range: 2^-52 times, for every
+/// term, its size and the number of roundings that went into it, counted generously (each is 2^-53).
+PressureCurve::Bounds PressureCurve::rounding_at(double T) const {
+  constexpr double kUnit = std::numeric_limits<double>::epsilon();
+  const auto& c = set_.coefficients;
+  const auto size = [](double value) { return std::abs(value); };
+  switch (set_.form) {
+    case PressureForm::antoine_log10: {
+      const double reach = size(T + c[2]);
+      return {8.0 * kUnit * 2.31 * (size(c[0]) + size(c[1]) / reach), 8.0 * kUnit * 2.31 * size(c[1]) / square(reach)};
+    }
+    case PressureForm::perry_101: {
+      const double growth = 10.0 + 2.0 * size(c[4]) * (1.0 + size(std::log(T)));  // of the error in T^C5
+      const double power = growth * size(c[3]) * real_power(T, c[4]);
+      const double rest = size(c[1]) / T;
+      return {kUnit * (8.0 * (size(c[0]) + rest + size(c[2] * std::log(T))) + power),
+              kUnit * (8.0 * (size(c[2]) + rest) + (2.0 + size(c[4])) * power) / T};
+    }
+    case PressureForm::clausius_clapeyron:
+      return {8.0 * kUnit * (12.0 + c[1] * (1.0 / c[0] + 1.0 / T)), 8.0 * kUnit * c[1] / square(T)};
+    default: break;
+  }
+  // t carries an absolute error of 2^-53, which the slopes of t^k (at most k) and of the bracket pass on; the latter,
+  // k (k - 1) t^(k - 2) (1 - t), grows like 0.75 t^-0.5 towards Tc, where the bracket changes by less than 1.5 2^-26.5.
+  double value = 0.0;
+  double slope = 0.0;
+  const double Tc = critical_K(set_);
+  const double t = std::max(reduced(T, Tc), 1e-16);
+  for (const WagnerTerm& term : wagner_terms(set_.form)) {
+    const double k = term.exponent;
+    value += size(c[term.coefficient]) * (k + 10.0);
+    slope += size(c[term.coefficient]) * (k * (k + 10.0) + 1.0 / std::sqrt(t));
+  }
+  return {kUnit * (Tc / T * value + 4.0 * size(ln_reference_.value)), kUnit * Tc / square(T) * slope};
 }
 
-double PressureCurve::ln_psat(double T) const { return ln_psat_at<double>(T); }
-double PressureCurve::d_ln_psat_dT(double T) const { return slope_at<double>(T); }
+double PressureCurve::ln_psat(double T) const {
+  return T < low_.end_K ? low_.value(T) : T > high_.end_K ? high_.value(T) : formula(T);
+}
+double PressureCurve::d_ln_psat_dT(double T) const {
+  return T < low_.end_K ? low_.slope(T) : T > high_.end_K ? high_.slope(T) : formula_slope(T);
+}
+
+/// Enclosures at one temperature: inside the range the double result and its rounding bound, several times cheaper than
+/// the formula in intervals.
+Interval PressureCurve::ln_psat_at(double T) const {
+  if (T < low_.end_K || T > high_.end_K) {
+    return (T < low_.end_K ? low_ : high_).value(Interval(T));
+  }
+  const double value = formula(T);
+  const double room = rounding_at(T).value;
+  return Interval::outward(value - room, value + room);
+}
+Interval PressureCurve::slope_at(double T) const {
+  if (T < low_.end_K || T > high_.end_K) {
+    return (T < low_.end_K ? low_ : high_).slope(Interval(T));
+  }
+  const double slope = formula_slope(T);
+  const double room = rounding_at(T).slope;
+  return Interval::outward(slope - room, slope + room);
+}
 
 Interval PressureCurve::ln_psat(const Interval& T) const {
   if (!T.is_positive() || !T.is_bounded()) {
     return Interval::whole();
   }
-  return {ln_psat_at<Interval>(T.lower()).lower(), ln_psat_at<Interval>(T.upper()).upper()};
+  return {ln_psat_at(T.lower()).lower(), ln_psat_at(T.upper()).upper()};
 }
 
 Interval PressureCurve::d_ln_psat_dT(const Interval& T) const {
@@ -287,12 +354,12 @@ Interval PressureCurve::d_ln_psat_dT(const Interval& T) const {
   }
   // Falling from the low continuation through the range up to falling_to_K_: end points enclose.
   if (T.upper() <= falling_to_K_ || falling_to_K_ == high_.end_K) {
-    return {slope_at<Interval>(T.upper()).lower(), slope_at<Interval>(T.lower()).upper()};
+    return {slope_at(T.upper()).lower(), slope_at(T.lower()).upper()};
   }
   std::optional<Interval> result;
   const auto add = [&result](const Interval& piece) { result = result ? hull(*result, piece) : piece; };
   if (T.lower() < falling_to_K_) {
-    add({slope_at<Interval>(falling_to_K_).lower(), slope_at<Interval>(T.lower()).upper()});
+    add({slope_at(falling_to_K_).lower(), slope_at(T.lower()).upper()});
   }
   Interval inside = T;
   if (intersect(inside, Interval(falling_to_K_, high_.end_K))) {

@@ -81,10 +81,13 @@ class PressureCurve {
   template <class S>
   [[nodiscard]] S formula_slope(const S& T) const;
   [[nodiscard]] Interval formula_curvature(const Interval& T) const;
-  template <class S>
-  [[nodiscard]] S ln_psat_at(double T) const;
-  template <class S>
-  [[nodiscard]] S slope_at(double T) const;
+  struct Bounds {
+    double value;
+    double slope;
+  };
+  [[nodiscard]] Bounds rounding_at(double T) const;
+  [[nodiscard]] Interval ln_psat_at(double T) const;
+  [[nodiscard]] Interval slope_at(double T) const;
   void check_coefficients() const;
   void choose_range();
   void certify_rising() const;
@@ -92,6 +95,8 @@ class PressureCurve {
   [[nodiscard]] Continuation continuation(double end_K) const;
 
   PressureSet set_;
+  Enclosed ln_10_;
+  Enclosed ln_reference_;      ///< ln Pc, or ln of one atmosphere
   double falling_to_K_ = 0.0;  ///< dlnP/dT is shown to fall up to here
   Continuation low_;
   Continuation high_;

@@ -23,19 +23,20 @@ class Wilson {
   Wilson() = default;
   explicit Wilson(const PairParameters& ln_lambda);
   [[nodiscard]] int size() const { return p_.size(); }
-  [[nodiscard]] bool depends_on_temperature() const { return p_.depends_on_temperature(); }
+  [[nodiscard]] bool depends_on_temperature() const { return depends_on_temperature_; }
   [[nodiscard]] Wilson face(const Members& members) const { return Wilson(p_.face(members)); }
   [[nodiscard]] const PairParameters& parameters() const { return p_; }
 
   template <class S>
   [[nodiscard]] Vec<S> ln_gamma(const S& temperature_K, const Vec<S>& x) const {
+    expect_size(x, size());
     using std::log;
-    Matrix<S> L(size());
-    Vec<S> D(size());
+    Matrix<S> L(size(), for_overwrite);
+    Vec<S> D(size(), for_overwrite);
     factors(temperature_K, x, L, D);
     const int n = size();
-    Vec<S> result(n);
-    Vec<S> column(n);
+    Vec<S> result(n, for_overwrite);
+    Vec<S> column(n, for_overwrite);
     for (int i = 0; i < n; ++i) {
       for (int k = 0; k < n; ++k) {
         column[k] = L(k, i) / D[k];
@@ -47,21 +48,22 @@ class Wilson {
 
   template <class S>
   void ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& x, LnGammaGradient<S>& out) const {
+    expect_size(x, size());
     using std::log;
     const int n = size();
-    Matrix<S> L(n);
-    Vec<S> D(n);
+    Matrix<S> L(n, for_overwrite);
+    Vec<S> D(n, for_overwrite);
     factors(temperature_K, x, L, D);
-    Matrix<S> l(n);  // L_ki / D_k
+    Matrix<S> l(n, for_overwrite);  // L_ki / D_k
     for (int k = 0; k < n; ++k) {
       for (int i = 0; i < n; ++i) {
         l(k, i) = L(k, i) / D[k];
       }
     }
-    out.value = Vec<S>(n);
-    out.d_dx = Matrix<S>(n);
+    out.value = Vec<S>(n, for_overwrite);
+    out.d_dx = Matrix<S>(n, for_overwrite);
     out.d_dT = Vec<S>(n, S(0.0));
-    Vec<S> column(n);
+    Vec<S> column(n, for_overwrite);
     for (int i = 0; i < n; ++i) {
       for (int k = 0; k < n; ++k) {
         column[k] = l(k, i);
@@ -85,8 +87,8 @@ class Wilson {
   void factors(const S& T, const Vec<S>& x, Matrix<S>& L, Vec<S>& D) const {
     using std::exp;
     const int n = size();
-    const PairTemperature<S> shared = p_.temperature(T);
-    Vec<S> row(n);
+    const PairTemperature<S> shared = p_.temperature(T, uses_ln_T_);
+    Vec<S> row(n, for_overwrite);
     for (int i = 0; i < n; ++i) {
       for (int j = 0; j < n; ++j) {
         L(i, j) = i == j ? S(1.0) : exp(p_.at(i, j, shared));
@@ -99,10 +101,10 @@ class Wilson {
   template <class S>
   void temperature_slopes(const S& T, const Vec<S>& x, const Matrix<S>& L, const Matrix<S>& l, Vec<S>& out) const {
     const int n = size();
-    const PairTemperature<S> shared = p_.temperature(T);
-    Vec<S> weight(n);
-    Vec<S> column(n);
-    Vec<S> dlnD(n);
+    const PairTemperature<S> shared = p_.temperature(T, uses_ln_T_);
+    Vec<S> weight(n, for_overwrite);
+    Vec<S> column(n, for_overwrite);
+    Vec<S> dlnD(n, for_overwrite);
     for (int i = 0; i < n; ++i) {
       for (int j = 0; j < n; ++j) {
         weight[j] = x[j] * L(i, j);
@@ -120,6 +122,8 @@ class Wilson {
   }
 
   PairParameters p_;
+  bool depends_on_temperature_ = false;
+  bool uses_ln_T_ = false;
 };
 
 }  // namespace stillshed

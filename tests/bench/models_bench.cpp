@@ -23,8 +23,12 @@ Nrtl nrtl_no_temperature() {
   p.alpha = samples::nrtl_full().alpha;
   return Nrtl(p);
 }
-Margules margules() { return Margules(samples::matrix({{0, 1.2, -0.8}, {1.2, 0, 1.9}, {-0.8, 1.9, 0}})); }
-Unifac unifac(GroupModel kind) { return samples::unifac(kind, samples::ethanol_benzene_water()); }
+Margules margules() {
+  return Margules(samples::matrix({{0, 1.2, -0.8}, {1.2, 0, 1.9}, {-0.8, 1.9, 0}}));
+}
+Unifac unifac(GroupModel kind) {
+  return samples::unifac(kind, samples::ethanol_benzene_water());
+}
 
 template <class S>
 Vec<S> composition(double half_width);
@@ -38,7 +42,9 @@ Vec<Interval> composition(double half_width) {
           Interval(0.4 - 2.0 * half_width, 0.4 + 2.0 * half_width)};
 }
 
-double next_temperature(double T) { return T < 360.0 ? T + 0.01 : 340.0; }
+double next_temperature(double T) {
+  return T < 360.0 ? T + 0.01 : 340.0;
+}
 
 void bare_exp(benchmark::State& state) {
   double x = 0.1;
@@ -102,8 +108,15 @@ void enter(const std::string& name, const Model& model) {
 }
 
 PressureCurve water() {
-  return PressureCurve({"water", PressureForm::wagner_25, {-7.86975, 1.90561, -2.30891, -2.06472, 647.1, 22064000.0},
-                        273.15, 647.1, "", "", false, ""});
+  return PressureCurve({"water",
+                        PressureForm::wagner_25,
+                        {-7.86975, 1.90561, -2.30891, -2.06472, 647.1, 22064000.0},
+                        273.15,
+                        647.1,
+                        "",
+                        "",
+                        false,
+                        ""});
 }
 
 void pressure_double(benchmark::State& state) {

@@ -134,7 +134,8 @@ void check_gradient(const Json& item, const LnGammaGradient<double>& result, int
     EXPECT_NEAR(result.d_dT[i], slopes[at], relative * (1e-3 + std::abs(slopes[at])));
     for (int j = 0; j < n; ++j) {  // only differences within a row are defined (models/gradient.hpp)
       const double expected = rows[at][static_cast<std::size_t>(j)] - rows[at][0];
-      EXPECT_NEAR(result.d_dx(i, j) - result.d_dx(i, 0), expected, relative * (1.0 + std::abs(rows[at][0]) + std::abs(expected)));
+      EXPECT_NEAR(result.d_dx(i, j) - result.d_dx(i, 0), expected,
+                  relative * (1.0 + std::abs(rows[at][0]) + std::abs(expected)));
     }
   }
 }
@@ -185,7 +186,7 @@ TEST(Activity, InfiniteDilutionComesOutDirectly) {
     SCOPED_TRACE(item.at("id").get<std::string>());
     const ActivityModel model = model_of(item);
     for (int i = 0; i < 2; ++i) {
-      const Composition x = i == 0 ? Composition{0.0, 1.0} : Composition{1.0, 0.0};
+      const Composition x = composition_of(i == 0 ? Json{0.0, 1.0} : Json{1.0, 0.0});
       const double expected = item.at("gamma_infinite_dilution")[static_cast<std::size_t>(i)];
       EXPECT_NEAR(std::exp(evaluate(model, item.at("T_K"), x).value[i]), expected, tolerance(item, i, expected));
     }

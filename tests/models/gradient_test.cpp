@@ -23,8 +23,8 @@ TEST(Gradient, MeanValueTheoremHoldsOnTheSimplex) {
   const auto at_a = model.ln_gamma(330.0, a);
   const auto at_b = model.ln_gamma(340.0, b);
   for (int i = 0; i < 3; ++i) {
-    const Interval change =
-        (g.d_dx(i, 0) - g.d_dx(i, 2)) * (b[0] - a[0]) + (g.d_dx(i, 1) - g.d_dx(i, 2)) * (b[1] - a[1]) + g.d_dT[i] * 10.0;
+    const Interval change = (g.d_dx(i, 0) - g.d_dx(i, 2)) * (b[0] - a[0]) +
+                            (g.d_dx(i, 1) - g.d_dx(i, 2)) * (b[1] - a[1]) + g.d_dT[i] * 10.0;
     EXPECT_TRUE(change.contains(at_b[i] - at_a[i])) << i;
   }
 }

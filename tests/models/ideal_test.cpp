@@ -14,7 +14,9 @@ TEST(Ideal, IsZeroEverywhere) {
   EXPECT_EQ(model.face({0, 2}).size(), 2);
 }
 
-TEST(Ideal, ObeysTheLaws) { laws::expect_activity_laws(Ideal(4), {.name = "ideal"}); }
+TEST(Ideal, ObeysTheLaws) {
+  laws::expect_activity_laws(Ideal(4), {.name = "ideal"});
+}
 
 }  // namespace
 }  // namespace stillshed

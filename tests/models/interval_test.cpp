@@ -1,5 +1,6 @@
 // Interval against MPFI (200-bit end points): every operation, seeded random operands of every kind.
-// The witness is rounded to 200 bits, 147 more than a double carries: a result that MPFI does not hold is a broken bound.
+// The witness is rounded to 200 bits, 147 more than a double carries: a result that MPFI does not hold is a broken
+// bound.
 #include "models/interval.hpp"
 
 #include <gtest/gtest.h>
@@ -84,7 +85,9 @@ class Operands {
   std::mt19937_64 random_;
 };
 
-void set(Exact& exact, const Interval& a) { mpfi_interv_d(exact.value, a.lower(), a.upper()); }
+void set(Exact& exact, const Interval& a) {
+  mpfi_interv_d(exact.value, a.lower(), a.upper());
+}
 
 std::string text(const Interval& a) {
   char buffer[80];
@@ -191,12 +194,14 @@ TEST(Interval, ElementaryFunctionsHoldTheExactResult) {
         continue;
       }
     }
-    ASSERT_TRUE(holds(ours, c)) << "function " << k % 6 << " of " << text(x) << " gives " << text(ours) << " seed " << seed;
+    ASSERT_TRUE(holds(ours, c)) << "function " << k % 6 << " of " << text(x) << " gives " << text(ours) << " seed "
+                                << seed;
     ASSERT_TRUE(is_tight(ours, c, 8.0)) << "function " << k % 6 << " of " << text(x);
   }
 }
 
-/// Chains of operations on fractions and positive numbers, the mix that models use: rounding must never accumulate away.
+/// Chains of operations on fractions and positive numbers, the mix that models use: rounding must never accumulate
+/// away.
 TEST(Interval, ChainsHoldTheExactResult) {
   Operands draw(5);
   Exact x;
@@ -279,8 +284,18 @@ TEST(Interval, IntersectSaysWhenNothingIsLeft) {
 
 // A model that branches must not compile (the build also tries one: tests/models/must_not_compile).
 template <class S>
-concept Orders = requires(S a, S b) { a < b; } || requires(S a, S b) { a > b; } || requires(S a, double b) { a < b; } ||
-                 requires(S a, S b) { a == b; };
+concept Orders = requires(S a, S b) {
+  a < b;
+}
+|| requires(S a, S b) {
+  a > b;
+}
+|| requires(S a, double b) {
+  a < b;
+}
+|| requires(S a, S b) {
+  a == b;
+};
 static_assert(!Orders<Interval>);
 static_assert(Orders<double>);
 static_assert(!std::is_convertible_v<Interval, double>);

@@ -9,7 +9,8 @@ namespace stillshed {
 namespace {
 
 TEST(Margules, ObeysTheLaws) {
-  const Margules model(samples::matrix({{0, 1.2, -0.8, 0.3}, {1.2, 0, 1.9, -1.1}, {-0.8, 1.9, 0, 0.6}, {0.3, -1.1, 0.6, 0}}));
+  const Margules model(
+      samples::matrix({{0, 1.2, -0.8, 0.3}, {1.2, 0, 1.9, -1.1}, {-0.8, 1.9, 0, 0.6}, {0.3, -1.1, 0.6, 0}}));
   laws::expect_activity_laws(model, {.name = "margules"});
 }
 

@@ -117,8 +117,7 @@ TEST(Means, JetsFollowTheQuotientRule) {
   EXPECT_NEAR(mean.v[0], plain.v[0], 1e-15);
   EXPECT_NEAR(mean.v[1], plain.v[1], 1e-15);
   const Jet ratio = ratio_of_sums(w.data(), v.data(), w.data(), 3);
-  const Jet expected =
-      (w[0] * v[0] + w[1] * v[1] + w[2] * v[2]) / (w[0] * w[0] + w[1] * w[1] + w[2] * w[2]);
+  const Jet expected = (w[0] * v[0] + w[1] * v[1] + w[2] * v[2]) / (w[0] * w[0] + w[1] * w[1] + w[2] * w[2]);
   EXPECT_NEAR(ratio.a, expected.a, 1e-15);
   EXPECT_NEAR(ratio.v[0], expected.v[0], 1e-14);
   EXPECT_NEAR(ratio.v[1], expected.v[1], 1e-14);

@@ -14,16 +14,18 @@ MixtureComponent component(const char* id, double boiling_point_K, double H_K, d
   MixtureComponent c;
   c.id = id;
   c.molar_mass_g_mol = molar_mass_g_mol;
-  c.pressure = PressureCurve(
-      {id, PressureForm::clausius_clapeyron, {boiling_point_K, H_K}, {}, {}, "", "", false, ""});
+  c.pressure = PressureCurve({id, PressureForm::clausius_clapeyron, {boiling_point_K, H_K}, {}, {}, "", "", false, ""});
   return c;
 }
 
 std::vector<MixtureComponent> three() {
-  return {component("A", 350.0, 4000.0, 46.0), component("B", 353.0, 3700.0, 78.0), component("C", 373.0, 4900.0, 18.0)};
+  return {component("A", 350.0, 4000.0, 46.0), component("B", 353.0, 3700.0, 78.0),
+          component("C", 373.0, 4900.0, 18.0)};
 }
 
-Mixture full() { return {three(), Nrtl(samples::nrtl_full()), RedlichKister(3, {{0, 2, {0.4, -0.1}}})}; }
+Mixture full() {
+  return {three(), Nrtl(samples::nrtl_full()), RedlichKister(3, {{0, 2, {0.4, -0.1}}})};
+}
 
 constexpr double kLnP = 11.526;  // about 1 atm
 

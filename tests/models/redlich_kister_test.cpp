@@ -7,9 +7,13 @@
 namespace stillshed {
 namespace {
 
-RedlichKister ternary() { return {3, {{0, 1, {0.8, -0.3, 0.2, 0.1}}, {2, 1, {1.1, 0.4}}, {0, 2, {-0.5, 0.0, 0.7}}}}; }
+RedlichKister ternary() {
+  return {3, {{0, 1, {0.8, -0.3, 0.2, 0.1}}, {2, 1, {1.1, 0.4}}, {0, 2, {-0.5, 0.0, 0.7}}}};
+}
 
-TEST(RedlichKister, ObeysTheLaws) { laws::expect_activity_laws(ternary(), {.name = "redlich-kister"}); }
+TEST(RedlichKister, ObeysTheLaws) {
+  laws::expect_activity_laws(ternary(), {.name = "redlich-kister"});
+}
 
 TEST(RedlichKister, IsTheDerivativeOfItsGibbsEnergy) {
   // n gE/RT by moles; its derivative with respect to n_k is ln gamma_k.

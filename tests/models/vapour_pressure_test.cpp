@@ -14,24 +14,51 @@ namespace {
 
 PressureSet water_wagner() {
   // Wagner, Pruss, J. Phys. Chem. Ref. Data 22 (1993) 783-787, Eq. 1.
-  return {"water/wagner", PressureForm::wagner_water,
+  return {"water/wagner",
+          PressureForm::wagner_water,
           {-7.85951783, 1.84408259, -11.7866497, 22.6807411, -15.9618719, 1.80122502, 647.096, 22064000.0},
-          273.16, 647.096, "", "", false, ""};
+          273.16,
+          647.096,
+          "",
+          "",
+          false,
+          ""};
 }
 PressureSet water_wagner_25() {
   // VDI Heat Atlas, 2nd ed., Springer 2010, Part D3.
-  return {"water/wagner-25", PressureForm::wagner_25,
-          {-7.86975, 1.90561, -2.30891, -2.06472, 647.1, 22064000.0}, 273.15, 647.1, "", "", false, ""};
+  return {"water/wagner-25",
+          PressureForm::wagner_25,
+          {-7.86975, 1.90561, -2.30891, -2.06472, 647.1, 22064000.0},
+          273.15,
+          647.1,
+          "",
+          "",
+          false,
+          ""};
 }
 PressureSet water_wagner_36() {
   // McGarry, Ind. Eng. Chem. Process Des. Dev. 22 (1983) 313-322.
-  return {"water/wagner-36", PressureForm::wagner_36,
-          {-7.76451, 1.45838, -2.7758, -1.23303, 647.35, 22122300.0}, 275.0, 647.35, "", "", false, ""};
+  return {"water/wagner-36",
+          PressureForm::wagner_36,
+          {-7.76451, 1.45838, -2.7758, -1.23303, 647.35, 22122300.0},
+          275.0,
+          647.35,
+          "",
+          "",
+          false,
+          ""};
 }
 PressureSet water_perry() {
   // Perry's Chemical Engineers' Handbook, 8th ed. (2008), Table 2-8.
-  return {"water/perry", PressureForm::perry_101, {73.649, -7258.2, -7.3037, 4.1653e-06, 2.0},
-          273.16, 647.096, "", "", false, ""};
+  return {"water/perry",
+          PressureForm::perry_101,
+          {73.649, -7258.2, -7.3037, 4.1653e-06, 2.0},
+          273.16,
+          647.096,
+          "",
+          "",
+          false,
+          ""};
 }
 PressureSet water_antoine() {
   // Poling, Prausnitz, O'Connell, The Properties of Gases and Liquids, 5th ed. (2001), App. A.
@@ -62,7 +89,8 @@ TEST(PressureCurve, ReproducesSmithVanNessAbbottExample10_3) {
   // memory): ln P/kPa = A - B/(T + C); at 318.15 K methanol 44.51 kPa, methyl acetate 65.64 kPa.
   const auto curve = [](double A, double B, double C) {
     const double ln10 = std::log(10.0);
-    return PressureCurve({"x", PressureForm::antoine_log10, {A / ln10 + 3.0, B / ln10, C}, 280.0, 350.0, "", "", false, ""});
+    return PressureCurve(
+        {"x", PressureForm::antoine_log10, {A / ln10 + 3.0, B / ln10, C}, 280.0, 350.0, "", "", false, ""});
   };
   EXPECT_NEAR(std::exp(curve(16.59158, 3643.31, -33.424).ln_psat(318.15)), 44510.0, 5.0);
   EXPECT_NEAR(std::exp(curve(14.25326, 2665.54, -53.424).ln_psat(318.15)), 65640.0, 5.0);

@@ -21,7 +21,7 @@ struct LawOptions {
   double t_low_K = 280.0;
   double t_high_K = 420.0;
   unsigned seed = 20240611;
-  int points = 300; ///< ten times as many when STILLSHED_FULL=1
+  int points = 300;  ///< ten times as many when STILLSHED_FULL=1
 };
 
 inline int scaled(int count) {
