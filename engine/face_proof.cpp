@@ -259,7 +259,8 @@ class FaceProver {
 };
 
 /// A point that stands for a cluster: a numerical root in it or beside it, else its middle.
-LocatedRoot representative(const FaceSystem& system, const SearchBox& cluster, const std::vector<LocatedRoot>& located) {
+LocatedRoot representative(const FaceSystem& system, const SearchBox& cluster,
+                           const std::vector<LocatedRoot>& located) {
   constexpr double kBeside = 1e-6;
   LocatedRoot middle{Composition(system.size()), cluster.T.mid()};
   SearchBox reach = cluster;
@@ -272,7 +273,8 @@ LocatedRoot representative(const FaceSystem& system, const SearchBox& cluster, c
   for (double& x : middle.x) {
     x /= total;
   }
-  reach.T = Interval(cluster.T.lower() - kKelvinPerFraction * kBeside, cluster.T.upper() + kKelvinPerFraction * kBeside);
+  reach.T =
+      Interval(cluster.T.lower() - kKelvinPerFraction * kBeside, cluster.T.upper() + kKelvinPerFraction * kBeside);
   const std::optional<LocatedRoot> root = newton_from(system, middle);
   if (root && holds(reach, *root)) {
     return *root;

@@ -7,21 +7,23 @@
 ///   mean value   every f_i around the centre narrows T
 ///   Newton       the preconditioned system narrows every unknown
 ///   regular      at most one root: Newton in doubles from the centre looks for it, and verifies it
-/// and the rest is halved where the f differ most. Only the empty intersection of two valid enclosures dismisses a box: an
-/// unbounded or undefined enclosure never does.
+/// and the rest is halved where the f differ most. Only the empty intersection of two valid enclosures dismisses a box:
+/// an unbounded or undefined enclosure never does.
 ///
 /// A root is verified by a small box that a Krawczyk step maps strictly into itself (existence), within a box where the
 /// preconditioned gradient is regular (uniqueness). Located roots are verified first.
 ///
-/// A box narrower than `cluster_width` that nothing decides goes to a cluster, and clusters that touch are merged: tangent
-/// azeotropes, twins, roots exactly on a sub-face. After every kLeavesPerWidth such boxes the width is raised fourfold,
-/// so that a whole curve of roots costs little.
+/// A box narrower than `cluster_width` that nothing decides goes to a cluster, and clusters that touch are merged:
+/// tangent azeotropes, twins, roots exactly on a sub-face. After every kLeavesPerWidth such boxes the width is raised
+/// fourfold, so that a whole curve of roots costs little.
 ///
 /// Claims    complete: for the stored double-precision parameters, this model and T inside the reported bracket, every
-///           solution of the single-liquid equations (engine/face_system.hpp) with x on the closed face lies in a listed
-///           box and each box holds exactly one. degenerate: the same, but a cluster may hold any number, also none.
-///           undecided, stopped: the boxes in `undecided` are not dealt with. Nothing is said about T outside the bracket.
-/// Source    R. S. Maier, J. F. Brennecke, M. A. Stadtherr, AIChE J. 44 (1998) 1745 (interval Newton for azeotropes; from
+///           solution of the single-liquid equations (engine/face_system.hpp) with x on the closed face lies in a
+///           listed box and each box holds exactly one. degenerate: the same, but a cluster may hold any number, also
+///           none. undecided, stopped: the boxes in `undecided` are not dealt with. Nothing is said about T outside the
+///           bracket.
+/// Source    R. S. Maier, J. F. Brennecke, M. A. Stadtherr, AIChE J. 44 (1998) 1745 (interval Newton for azeotropes;
+/// from
 ///           memory).
 #pragma once
 

@@ -23,7 +23,8 @@ bool slice_is_empty(const FaceSystem& system, const Interval& slice) {
          std::any_of(f.begin(), f.end(), [](const Interval& f_i) { return !f_i.contains_zero(); });
 }
 
-/// Adds the part of the slice that may hold a root to the hull `found`; halves a slice that cannot be dismissed at once.
+/// Adds the part of the slice that may hold a root to the hull `found`; halves a slice that cannot be dismissed at
+/// once.
 void test_slice(const FaceSystem& system, const Interval& slice, Interval& found) {
   if (found.contains(slice) || slice_is_empty(system, slice)) {
     return;

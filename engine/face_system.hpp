@@ -2,8 +2,8 @@
 ///
 ///   f_i(T, x) = ln gamma_i(T, x) + p_i(T) = 0 for every member i,   p_i(T) = ln(Psat_i(T) / P),   sum x_i = 1
 ///
-/// regular at x_i = 0: no cut near faces. A root on a sub-face solves these equations only when K_k = 1 exactly for every
-/// member missing from it.
+/// regular at x_i = 0: no cut near faces. A root on a sub-face solves these equations only when K_k = 1 exactly for
+/// every member missing from it.
 ///
 /// Symbols   T temperature [K]; x mole fractions of the members [-]; P pressure [Pa].
 /// Numbers   double for the search, Interval for the proof. Interval results hold for the points of the box on the
@@ -52,10 +52,10 @@ class FaceSystem {
 
 /// Temperatures that can belong to a root of the face.
 ///
-/// sum x_i f_i = gE/RT + sum x_i p_i = 0, so there is no root where max_i p_i < -max gE/RT or min_i p_i > -min gE/RT, and
-/// none where some f_i has no zero on the face. The window from half the lowest to one and a half times the highest boiling point
-/// is cut into slices, each is tested by interval evaluation over the whole face, and the hull of the boiling points
-/// and of the slices that may hold a root is returned. Outside the window nothing is claimed.
+/// sum x_i f_i = gE/RT + sum x_i p_i = 0, so there is no root where max_i p_i < -max gE/RT or min_i p_i > -min gE/RT,
+/// and none where some f_i has no zero on the face. The window from half the lowest to one and a half times the highest
+/// boiling point is cut into slices, each is tested by interval evaluation over the whole face, and the hull of the
+/// boiling points and of the slices that may hold a root is returned. Outside the window nothing is claimed.
 [[nodiscard]] Interval temperature_bracket(const FaceSystem& system);
 
 }  // namespace stillshed

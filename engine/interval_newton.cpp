@@ -13,9 +13,13 @@ constexpr double kEpsilon = std::numeric_limits<double>::epsilon();
 /// Room for the rounding of a few operations on numbers of one sign.
 constexpr double kOutward = 1.0 + 16.0 * kEpsilon;
 
-Interval around(double middle, double radius) { return Interval::outward(middle - radius, middle + radius); }
+Interval around(double middle, double radius) {
+  return Interval::outward(middle - radius, middle + radius);
+}
 
-double magnitude(double middle, double radius) { return (std::abs(middle) + radius) * kOutward; }
+double magnitude(double middle, double radius) {
+  return (std::abs(middle) + radius) * kOutward;
+}
 
 Narrowing narrow(Interval& range, const Interval& by) {
   const double before = range.width();
@@ -231,10 +235,11 @@ Narrowing IntervalNewton::narrow_by_newton(SearchBox& box) const {
 }
 
 bool IntervalNewton::regular() const {
-  // Let M v = 0 with M within Y D and the fractions of v adding up to zero, and take the row k of the largest |v_k| / d_k:
+  // Let M v = 0 with M within Y D and the fractions of v adding up to zero, and take the row k of the largest |v_k| /
+  // d_k:
   //   |M_kk| d_k <= sum over the other unknowns of |M_kj| d_j + |M_kp| sum over the fractions of d_j
-  // because |v_p| is at most the sum of the other |v_j|. A scaling d that contradicts this in every row is looked for by
-  // a few Jacobi sweeps.
+  // because |v_p| is at most the sum of the other |v_j|. A scaling d that contradicts this in every row is looked for
+  // by a few Jacobi sweeps.
   const auto pivot = static_cast<std::size_t>(centre_.pivot);
   std::array<double, kMostUnknowns> d;
   for (std::size_t r = 0; r < n_; ++r) {

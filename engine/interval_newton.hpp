@@ -1,7 +1,7 @@
 /// Tests of one box of the completeness proof: mean-value form and preconditioned Newton step.
 ///
-/// With c a point of the box on the simplex, t the middle of T and D an enclosure of the gradient over the box, every root of
-/// the box satisfies, for any row of real weights Y and any real number m,
+/// With c a point of the box on the simplex, t the middle of T and D an enclosure of the gradient over the box, every
+/// root of the box satisfies, for any row of real weights Y and any real number m,
 ///     0 = Y f(c, t) + sum_j (Y D_j - m)(x_j - c_j) + Y D_T (T - t)          because sum_j (x_j - c_j) = 0
 /// so the choice of m costs nothing: it is the middle of Y D_p for the pivot p, the largest fraction.
 ///     mean value   Y = unit rows, m by the least sum of |middle - m| times width
@@ -32,7 +32,8 @@ enum class Narrowing { empty, narrowed, unchanged };
 class IntervalNewton {
  public:
   /// `mutation` is for tests of the tests: it scales the radii of D. 1 is sound, less is not.
-  IntervalNewton(const FaceSystem& system, double mutation) : system_(system), mutation_(mutation), n_(static_cast<std::size_t>(system.size())) {}
+  IntervalNewton(const FaceSystem& system, double mutation)
+      : system_(system), mutation_(mutation), n_(static_cast<std::size_t>(system.size())) {}
 
   /// Narrows every fraction to what the others leave of the unit; false when the box misses the simplex.
   [[nodiscard]] static bool cut_to_simplex(SearchBox& box);
@@ -54,12 +55,13 @@ class IntervalNewton {
   [[nodiscard]] Narrowing narrow_by_newton(SearchBox& box) const;
   /// True when Y D is strictly dominant for some scaling: at most one root where D holds. After `precondition`.
   [[nodiscard]] bool regular() const;
-  /// True when the Krawczyk step x - Y f(x) maps the box strictly into itself: at least one root. After `precondition`; the pivot's
-  /// side must hold one minus every sum of the others.
+  /// True when the Krawczyk step x - Y f(x) maps the box strictly into itself: at least one root. After `precondition`;
+  /// the pivot's side must hold one minus every sum of the others.
   [[nodiscard]] bool maps_into_itself(const SearchBox& box) const;
 
   [[nodiscard]] const BoxCentre& centre() const { return centre_; }
-  /// How far the f differ over the box along one column, seen from the pivot (smear). The column to halve has the largest.
+  /// How far the f differ over the box along one column, seen from the pivot (smear). The column to halve has the
+  /// largest.
   [[nodiscard]] double smear(const SearchBox& box, int column) const;
 
  private:

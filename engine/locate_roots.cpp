@@ -12,10 +12,10 @@ constexpr int kMostSteps = 60;
 constexpr double kLargestMove = 0.3;        ///< mole fraction, one step
 constexpr double kLargestHeating_K = 40.0;  ///< one step
 constexpr double kKeepShare = 0.1;          ///< a step leaves at least this share of each fraction
-constexpr double kTiny = 1e-9;              ///< a fraction below it that the linear model sends negative has left the face
-constexpr double kVanished = 1e-15;         ///< a fraction below it has left in any case
+constexpr double kTiny = 1e-9;       ///< a fraction below it that the linear model sends negative has left the face
+constexpr double kVanished = 1e-15;  ///< a fraction below it has left in any case
 constexpr double kConverged = 1e-15;
-constexpr double kResidual = 1e-11;         ///< accepted |f| at the end
+constexpr double kResidual = 1e-11;  ///< accepted |f| at the end
 
 /// Newton step of all x (sum zero) and T; false when singular.
 bool newton_step(const LnGammaGradient<double>& f, std::array<double, kMostUnknowns>& step) {
@@ -79,8 +79,8 @@ std::vector<Composition> starting_compositions(int n, const LocateOptions& optio
 }  // namespace
 
 Composition simplex_sequence(int size, std::uint64_t index, std::uint64_t seed) {
-  // Additive recurrence with the powers of 1/g, g the root of g^size = g + 1 (a generalised golden ratio), carried to the
-  // simplex by exponential spacings.
+  // Additive recurrence with the powers of 1/g, g the root of g^size = g + 1 (a generalised golden ratio), carried to
+  // the simplex by exponential spacings.
   double g = 2.0;
   for (int k = 0; k < 40; ++k) {
     g = std::pow(1.0 + g, 1.0 / size);

@@ -1,10 +1,12 @@
 /// Numerical search for azeotropes of one face: Newton from many deterministic starts. No claim of completeness.
 ///
-/// Starts    the barycentre; 80 % of every member; the given ones (roots of sub-faces nudged inward); then `spread` points of
+/// Starts    the barycentre; 80 % of every member; the given ones (roots of sub-faces nudged inward); then `spread`
+/// points of
 ///           a low-discrepancy sequence, shifted by the seed. The temperature of a start solves sum x_i f_i = 0 there.
-/// Method    Newton in (x, T) with exact derivatives, sum x_i = 1 as a bordering row; a step leaves at least a tenth of every
-///           fraction. A root counts when every |f_i| is at rounding level and every x_i is positive; a run that ends on a
-///           sub-face is dropped, for that face is searched by itself.
+/// Method    Newton in (x, T) with exact derivatives, sum x_i = 1 as a bordering row; a step leaves at least a tenth of
+/// every
+///           fraction. A root counts when every |f_i| is at rounding level and every x_i is positive; a run that ends
+///           on a sub-face is dropped, for that face is searched by itself.
 #pragma once
 
 #include <cstdint>

@@ -1,7 +1,7 @@
 /// Dense linear algebra for at most kMaxComponents + 1 unknowns, without heap: the inner loops of search and proof.
 ///
-/// Gauss elimination with partial pivoting. Eigen's decompositions of run-time size took twice the time of the whole Newton
-/// search of a ternary face; these loops do not show in its profile.
+/// Gauss elimination with partial pivoting. Eigen's decompositions of run-time size took twice the time of the whole
+/// Newton search of a ternary face; these loops do not show in its profile.
 #pragma once
 
 #include <array>

@@ -1,5 +1,5 @@
-/// Random and planted mixtures: no azeotrope missed, none invented. Quick: 300 mixtures, at least 85 of them with two or
-/// more azeotropes on one face; STILLSHED_FULL=1: 2,000.
+/// Random and planted mixtures: no azeotrope missed, none invented. Quick: 300 mixtures, at least 85 of them with two
+/// or more azeotropes on one face; STILLSHED_FULL=1: 2,000.
 #include <gtest/gtest.h>
 
 #include <algorithm>
@@ -20,10 +20,14 @@ using testing::KnownCase;
 using testing::KnownRoot;
 using testing::Random;
 
-bool full() { return std::getenv("STILLSHED_FULL") != nullptr; }
+bool full() {
+  return std::getenv("STILLSHED_FULL") != nullptr;
+}
 
 /// `quick` cases out of 300, scaled up in the full run.
-int cases(int quick) { return full() ? quick * 20 / 3 : quick; }
+int cases(int quick) {
+  return full() ? quick * 20 / 3 : quick;
+}
 
 double distance(const Composition& a, const Composition& b) {
   double largest = 0.0;
@@ -72,7 +76,8 @@ bool check(const KnownCase& known, const std::string& what) {
   })) << "a face is not proved";
   const std::vector<KnownRoot> roots = reported(result);
   for (const KnownRoot& root : known.roots) {
-    EXPECT_TRUE(contains(roots, root, 1e-7)) << "missed: " << root.x[0] << " " << root.x[1] << " at " << root.temperature_K;
+    EXPECT_TRUE(contains(roots, root, 1e-7))
+        << "missed: " << root.x[0] << " " << root.x[1] << " at " << root.temperature_K;
   }
   for (std::size_t k = 0; k < roots.size(); ++k) {
     EXPECT_LT(testing::residual(known.mixture, roots[k], kAtmosphere_Pa), 1e-10) << "invented";
@@ -112,13 +117,16 @@ void search_every_face(KnownCase& known, int starts, Random& random) {
     if (members.size() < 2) {
       continue;
     }
-    for (const KnownRoot& root : testing::search_independently(known.mixture, members, kAtmosphere_Pa, starts, random)) {
+    for (const KnownRoot& root :
+         testing::search_independently(known.mixture, members, kAtmosphere_Pa, starts, random)) {
       known.roots.push_back(root);
     }
   }
 }
 
-std::string name(const char* family, int k) { return std::string(family) + " seed " + std::to_string(k); }
+std::string name(const char* family, int k) {
+  return std::string(family) + " seed " + std::to_string(k);
+}
 
 TEST(SurveyProperty, closed_form_margules) {
   for (int k = 0; k < cases(70); ++k) {
@@ -159,7 +167,8 @@ TEST(SurveyProperty, planted_redlich_kister_binary) {
   int several = 0;
   for (int k = 0; k < cases(30); ++k) {
     Random random(static_cast<std::uint64_t>(50'000 + k));
-    several += check(testing::planted_redlich_kister_binary(random, 1 + k % 3), name("redlich-kister binary", k)) ? 1 : 0;
+    several +=
+        check(testing::planted_redlich_kister_binary(random, 1 + k % 3), name("redlich-kister binary", k)) ? 1 : 0;
   }
   EXPECT_GE(several, cases(30) * 2 / 3);
 }

@@ -91,7 +91,8 @@ INSTANTIATE_TEST_SUITE_P(Sizes, SymmetricTest, ::testing::Values(2, 3, 4, 5, 8))
 
 TEST(Survey, rows_of_the_parameters_follow_the_components) {
   const Survey result =
-      survey(margules_mixture({330.0, 355.0, 365.0}, {{0.0, 0.3, 1.4}, {0.3, 0.0, 1.2}, {1.4, 1.2, 0.0}}, {3700.0, 4800.0, 4900.0}),
+      survey(margules_mixture({330.0, 355.0, 365.0}, {{0.0, 0.3, 1.4}, {0.3, 0.0, 1.2}, {1.4, 1.2, 0.0}},
+                              {3700.0, 4800.0, 4900.0}),
              kAtmosphere_Pa);
   EXPECT_EQ(result.status, Status::complete);
   ASSERT_EQ(result.azeotropes.size(), 1U);
@@ -122,8 +123,9 @@ TEST(Survey, azeotrope_at_three_parts_per_million) {
 }
 
 TEST(Survey, three_ternary_azeotropes_close_together) {
-  const Survey result = survey(
-      nrtl({356.682, 350.057, 350.0}, {{0.0, 0.84, -0.03}, {0.06, 0.0, 0.18}, {0.84, -0.07, 0.0}}, 0.47), kAtmosphere_Pa);
+  const Survey result =
+      survey(nrtl({356.682, 350.057, 350.0}, {{0.0, 0.84, -0.03}, {0.06, 0.0, 0.18}, {0.84, -0.07, 0.0}}, 0.47),
+             kAtmosphere_Pa);
   EXPECT_EQ(result.status, Status::complete);
   ASSERT_EQ(of_size(result, 3).size(), 3U);
   ASSERT_EQ(of_size(result, 2).size(), 3U);
@@ -164,11 +166,11 @@ TEST(Survey, ternary_azeotrope_beside_a_binary_one) {
 }
 
 TEST(Survey, quaternary_azeotrope_beside_a_ternary_one) {
-  const Survey result = survey(
-      margules_mixture({349.6619257895, 349.7342051935, 347.8525532324, 352.782064499},
-                       {{0.0, 1.2, 0.9, 0.6}, {1.2, 0.0, 0.8, 1.0}, {0.9, 0.8, 0.0, 0.7}, {0.6, 1.0, 0.7, 0.0}},
-                       {3900.0, 4300.0, 4700.0, 4100.0}),
-      kAtmosphere_Pa);
+  const Survey result =
+      survey(margules_mixture({349.6619257895, 349.7342051935, 347.8525532324, 352.782064499},
+                              {{0.0, 1.2, 0.9, 0.6}, {1.2, 0.0, 0.8, 1.0}, {0.9, 0.8, 0.0, 0.7}, {0.6, 1.0, 0.7, 0.0}},
+                              {3900.0, 4300.0, 4700.0, 4100.0}),
+             kAtmosphere_Pa);
   EXPECT_EQ(result.status, Status::complete);
   EXPECT_EQ(result.azeotropes.size(), 11U);
   expect_point(result, {0.4, 0.35, 0.2499, 1e-4}, 340.0, NodeType::unstable_node, 1e-7, 1e-5);
@@ -208,8 +210,8 @@ TEST(Survey, twins_are_one_degenerate_record) {
 
 TEST(Survey, twins_beside_a_third_component) {
   // A and B cannot be told apart; with C each forms an azeotrope, so a whole line of ternary roots exists.
-  const Survey result =
-      survey(margules_mixture({350.0, 350.0, 352.0}, {{0.0, 0.0, 1.0}, {0.0, 0.0, 1.0}, {1.0, 1.0, 0.0}}), kAtmosphere_Pa);
+  const Survey result = survey(
+      margules_mixture({350.0, 350.0, 352.0}, {{0.0, 0.0, 1.0}, {0.0, 0.0, 1.0}, {1.0, 1.0, 0.0}}), kAtmosphere_Pa);
   EXPECT_EQ(result.status, Status::degenerate);
   EXPECT_LT(result.boxes, 200'000);
   EXPECT_EQ(of_size(result, 3).size(), 1U);
@@ -377,8 +379,9 @@ TEST(Survey, fixed_points_by_temperature) {
   const Survey result = survey(symmetric_mixture(3, 1.2), kAtmosphere_Pa);
   const std::vector<FixedPoint> points = result.fixed_points();
   ASSERT_EQ(points.size(), 7U);
-  EXPECT_TRUE(std::is_sorted(points.begin(), points.end(),
-                             [](const FixedPoint& a, const FixedPoint& b) { return a.temperature_K < b.temperature_K; }));
+  EXPECT_TRUE(std::is_sorted(points.begin(), points.end(), [](const FixedPoint& a, const FixedPoint& b) {
+    return a.temperature_K < b.temperature_K;
+  }));
   EXPECT_EQ(points[0].members.size(), 3);
 }
 

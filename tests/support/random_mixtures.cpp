@@ -30,8 +30,11 @@ std::vector<double> boiling_points_for(const ActivityModel& model, const Composi
 
 /// ln gamma_1 - ln gamma_2 of a binary whose model does not depend on T.
 double difference(const ActivityModel& model, double x1) {
-  const Vec<double> ln_gamma =
-      std::visit([&](const auto& m) { return m.ln_gamma(350.0, Vec<double>{x1, 1.0 - x1}); }, model);
+  const Vec<double> ln_gamma = std::visit(
+      [&](const auto& m) {
+        return m.ln_gamma(350.0, Vec<double>{x1, 1.0 - x1});
+      },
+      model);
   return ln_gamma[0] - ln_gamma[1];
 }
 
@@ -237,7 +240,8 @@ KnownCase planted_nrtl_binary(Random& random) {
     for (int k = 1; k < kSteps; ++k) {
       const double x = static_cast<double>(k) / kSteps;
       const double step = 1.0 / kSteps;
-      if ((difference(model, x) - difference(model, x - step)) * (difference(model, x + step) - difference(model, x)) < 0.0) {
+      if ((difference(model, x) - difference(model, x - step)) * (difference(model, x + step) - difference(model, x)) <
+          0.0) {
         turn = x;
       }
     }
@@ -409,8 +413,8 @@ double residual(const Mixture& mixture, const KnownRoot& root, double pressure_P
   return largest;
 }
 
-std::vector<KnownRoot> search_independently(const Mixture& mixture, const Members& members, double pressure_Pa, int starts,
-                                            Random& random) {
+std::vector<KnownRoot> search_independently(const Mixture& mixture, const Members& members, double pressure_Pa,
+                                            int starts, Random& random) {
   const Mixture face = mixture.face(members);
   const int n = members.size();
   const double ln_pressure = std::log(pressure_Pa);
@@ -458,7 +462,8 @@ std::vector<KnownRoot> search_independently(const Mixture& mixture, const Member
         jacobian.col(j) = (f(up) - f(down)) / (2.0 * kStep);
       }
       const Eigen::VectorXd move = -jacobian.partialPivLu().solve(value);
-      const double scale = std::min({1.0, 1.5 / (move.head(n - 1).cwiseAbs().maxCoeff() + 1e-300), 0.1 / (std::abs(move[n - 1]) + 1e-300)});
+      const double scale = std::min(
+          {1.0, 1.5 / (move.head(n - 1).cwiseAbs().maxCoeff() + 1e-300), 0.1 / (std::abs(move[n - 1]) + 1e-300)});
       z += scale * move;
       converged = scale == 1.0 && move.cwiseAbs().maxCoeff() < 1e-9;
       if (converged) {

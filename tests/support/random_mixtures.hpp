@@ -39,7 +39,8 @@ struct KnownCase {
 };
 
 /// Every root of every face of a two-suffix Margules mixture: one linear system and one quadratic each.
-[[nodiscard]] std::vector<KnownRoot> margules_roots(const Matrix<double>& A, const std::vector<double>& boiling_points_K,
+[[nodiscard]] std::vector<KnownRoot> margules_roots(const Matrix<double>& A,
+                                                    const std::vector<double>& boiling_points_K,
                                                     const std::vector<double>& H_K);
 
 /// |A| <= 1.9, so that no pair splits; the list of roots is complete.
@@ -54,16 +55,16 @@ struct KnownCase {
 [[nodiscard]] KnownCase planted_redlich_kister_binary(Random& random, int count);
 /// Ternary Redlich-Kister with `count` planted ternary azeotropes (1 to 3).
 [[nodiscard]] KnownCase planted_redlich_kister_ternary(Random& random, int count);
-/// Binary with one azeotrope at a fraction of `trace` of either component: 1e-6, say. Negative: just outside, so there is none.
-/// The list is complete.
+/// Binary with one azeotrope at a fraction of `trace` of either component: 1e-6, say. Negative: just outside, so there
+/// is none. The list is complete.
 [[nodiscard]] KnownCase near_corner(Random& random, double trace);
 /// Ternary Margules with one azeotrope at a fraction of `trace` of the third component; the list is complete.
 [[nodiscard]] KnownCase near_edge(Random& random, double trace);
 
 /// Roots of the open face by Newton with difference quotients from `starts` random points: an independent, incomplete
 /// search with its own equations (y_i/x_i equal for all members, bubble temperature eliminated).
-[[nodiscard]] std::vector<KnownRoot> search_independently(const Mixture& mixture, const Members& members, double pressure_Pa,
-                                                          int starts, Random& random);
+[[nodiscard]] std::vector<KnownRoot> search_independently(const Mixture& mixture, const Members& members,
+                                                          double pressure_Pa, int starts, Random& random);
 
 /// All roots of g on (0, 1): sign changes on a grid that is geometric towards both ends, then bisection.
 [[nodiscard]] std::vector<double> roots_on_unit_interval(const std::function<double(double)>& g);
