@@ -1,0 +1,31 @@
+#include "params/sha256.hpp"
+
+#include <gtest/gtest.h>
+
+#include <set>
+
+namespace stillshed {
+namespace {
+
+// Examples published by NIST with FIPS 180-4 (Secure Hash Standard, example values for SHA-256).
+TEST(Sha256, PublishedExamples) {
+  EXPECT_EQ(sha256_hex("abc"), "ba7816bf8f01cfea414140de5dae2223b00361a396177a9cb410ff61f20015ad");
+  EXPECT_EQ(sha256_hex("abcdbcdecdefdefgefghfghighijhijkijkljklmklmnlmnomnopnopq"),
+            "248d6a61d20638b8e5c026930c3e6039a33ce45964ff2167f6ecedd419db06c1");
+  EXPECT_EQ(sha256_hex(""), "e3b0c44298fc1c149afbf4c8996fb92427ae41e4649b934ca495991b7852b855");
+  EXPECT_EQ(sha256_hex(std::string(1'000'000, 'a')),
+            "cdc76e5c9914fb9281a1c7e284d73e67f1809a48a497200e046d39ccc7112cd0");
+}
+
+TEST(Sha256, EveryLengthAroundABlockIsPadded) {
+  std::set<std::string> seen;
+  for (std::size_t length = 0; length <= 200; ++length) {
+    const std::string hash = sha256_hex(std::string(length, 'x'));
+    EXPECT_EQ(hash.size(), 64U);
+    seen.insert(hash);
+  }
+  EXPECT_EQ(seen.size(), 201U);
+}
+
+}  // namespace
+}  // namespace stillshed
