@@ -26,7 +26,7 @@ import tempfile
 
 import numpy as np
 from scipy.integrate import solve_ivp
-from scipy.optimize import brentq, root
+from scipy.optimize import brentq, root, root_scalar
 
 ROOT = pathlib.Path(__file__).resolve().parent.parent
 PARAMS = ROOT / "params"
@@ -179,13 +179,17 @@ class Mixture:
         """(T, y) of a liquid."""
         def excess(temperature):
             return math.log(float(np.sum(x * np.exp(self.ln_k(temperature, x)))))
-        middle = guess if guess else 350.0
-        low, high = middle - 2.0, middle + 2.0
-        while excess(low) > 0:
-            low -= 15.0
-        while excess(high) < 0:
-            high += 15.0
-        temperature = brentq(excess, low, high, xtol=1e-11, rtol=1e-14)
+        temperature = None
+        if guess:
+            secant = root_scalar(excess, method="secant", x0=guess, x1=guess + 0.05, xtol=1e-11, maxiter=12)
+            temperature = secant.root if secant.converged and abs(secant.root - guess) < 20.0 else None
+        if temperature is None:
+            low = high = guess or 350.0
+            while excess(low) > 0:
+                low -= 15.0
+            while excess(high) < 0:
+                high += 15.0
+            temperature = brentq(excess, low, high, xtol=1e-11, rtol=1e-14)
         y = x * np.exp(self.ln_k(temperature, x))
         return temperature, y / np.sum(y)
 
@@ -270,17 +274,24 @@ class Mixture:
             lowest = min(lowest, -math.log(total))
         return lowest
 
-    def residue_curve(self, x, direction, length=60.0):
-        """Dense points of dx/dxi = direction * (x - y)."""
+    def residue_curve(self, x, direction):
+        """Points of dx/dxi = direction * (x - y), dense enough for straight pieces between them, until x and y agree."""
         guess = [self.bubble(x)[0]]
 
         def field(_xi, reduced):
-            point = np.append(reduced, 1.0 - np.sum(reduced))
-            guess[0], y = self.bubble(np.maximum(point, 0.0), guess[0])
+            point = np.maximum(np.append(reduced, 1.0 - np.sum(reduced)), 0.0)  # a trial step may leave the simplex
+            point /= np.sum(point)
+            guess[0], y = self.bubble(point, guess[0])
             return direction * (point - y)[:-1]
 
-        solved = solve_ivp(field, (0.0, length), x[:-1], method="DOP853", rtol=1e-10, atol=1e-13, dense_output=True)
-        reduced = solved.sol(np.linspace(0.0, length, 6000)).T
+        def arrived(xi, reduced):
+            return np.max(np.abs(field(xi, reduced))) - 1e-6
+
+        arrived.terminal = True
+        solved = solve_ivp(field, (0.0, 2000.0), x[:-1], method="DOP853", rtol=1e-9, atol=1e-12, max_step=1.0,
+                           dense_output=True, events=arrived)
+        times = np.unique(np.concatenate([np.linspace(a, b, 40) for a, b in zip(solved.t[:-1], solved.t[1:])]))
+        reduced = solved.sol(times).T
         return np.column_stack([reduced, 1.0 - reduced.sum(axis=1)])
 
 
@@ -474,7 +485,7 @@ class Comparison:
 
 
 def distance_to_polyline(point, line, end):
-    """The integrated curve runs into a fixed point: close its last gap by the straight piece to the printed end."""
+    """The integrated curve stops just before a fixed point: a straight piece to the printed end closes the gap."""
     nodes = np.vstack([line, end])
     start, step = nodes[:-1], np.diff(nodes, axis=0)
     length2 = np.maximum(np.sum(step**2, axis=1), 1e-300)
