@@ -21,7 +21,7 @@
 ///                                 a start that did not converge.
 /// Source    M. L. Michelsen, Fluid Phase Equilibria 9 (1982) 1-19 (from memory); L. E. Baker, A. C. Pierce,
 ///           K. D. Luks, SPE J. 22 (1982) 731-742 (from memory).
-/// Cost      measured on one core, search alone / with proof: NRTL and Margules ternaries 20-90 us / 0.1-2 ms, UNIFAC
+/// Cost      measured on one core, search alone / with proof: NRTL and Margules ternaries 20-180 us / 0.1-2 ms, UNIFAC
 ///           ternaries 70-300 us / 1-6 ms, NRTL quaternaries 80-160 us / 1-6 ms; more near a critical point.
 #pragma once
 
