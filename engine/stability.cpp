@@ -1,6 +1,5 @@
 #include "engine/stability.hpp"
 
-#include <Eigen/Cholesky>
 #include <Eigen/Eigenvalues>
 #include <algorithm>
 #include <cmath>
@@ -8,6 +7,7 @@
 #include <variant>
 
 #include "engine/stability_proof.hpp"
+#include "engine/tangent_plane_descent.hpp"
 
 namespace stillshed {
 namespace {
@@ -15,23 +15,7 @@ namespace {
 using SmallMatrix = Eigen::Matrix<double, Eigen::Dynamic, Eigen::Dynamic, 0, kMaxComponents, kMaxComponents>;
 using SmallVector = Eigen::Matrix<double, Eigen::Dynamic, 1, 0, kMaxComponents, 1>;
 
-constexpr int kSubstitutions = 3;  // enough to bring very dilute components to their place
-constexpr int kMaxIterations = 120;
-constexpr double kStationary = 1e-11;  // size of the gradient in 2 sqrt(W)
-constexpr double kSamePlace = 1e-5;    // a stationary point this close to x is x itself
-constexpr double kLargestExponent = 60.0;
-
-Composition normalised(const Composition& x) {
-  Composition result = x;
-  double sum = 0.0;
-  for (const double value : x) {
-    sum += value;
-  }
-  for (double& value : result) {
-    value /= sum;
-  }
-  return result;
-}
+constexpr double kSamePlace = 1e-5;  // a stationary point this close to x is x itself
 
 Members present(const Composition& x) {
   Members members;
@@ -64,140 +48,6 @@ Composition in_mixture(const Composition& x, const Members& members, int size) {
 struct Reference {
   Composition x;
   Vec<double> d;  ///< ln x_i + ln g_i(x)
-};
-
-/// End of one descent.
-struct Descent {
-  bool converged = false;
-  double tpd = 0.0;
-  Composition w;
-};
-
-/// Descends Michelsen's unnormalised form of tpd,
-///   tm(W) = 1 + sum_i W_i (s_i - 1),  s_i = ln W_i + ln g_i(W/sum W) - d_i,
-/// whose stationary points have s_i = 0 and tpd = -ln sum W.
-class TangentPlaneDescent {
- public:
-  TangentPlaneDescent(const Mixture& face, double temperature_K, const Reference& reference)
-      : face_(face), temperature_K_(temperature_K), d_(reference.d) {}
-
-  [[nodiscard]] Descent run(const Composition& start) const {
-    Composition W = start;
-    for (int k = 0; k < kSubstitutions; ++k) {
-      W = substitute(W);
-    }
-    Model here = evaluate(W);
-    double shift = 0.0;
-    Descent result;
-    for (int iteration = 0; iteration < kMaxIterations; ++iteration) {
-      if (!std::isfinite(here.tm)) {
-        break;
-      }
-      if (here.gradient.cwiseAbs().maxCoeff() < kStationary) {
-        result.converged = true;
-        break;
-      }
-      if (!step(W, here, shift)) {
-        // No descent left: a minimum within rounding, or a failure if the gradient is still large.
-        result.converged = here.gradient.cwiseAbs().maxCoeff() < 1e-7;
-        break;
-      }
-    }
-    result.w = normalised(W);
-    result.tpd = distance(result.w);
-    return result;
-  }
-
-  [[nodiscard]] double distance(const Composition& w) const {
-    const Vec<double> ln_gamma = face_.ln_gamma(temperature_K_, w);
-    double sum = 0.0;
-    for (int i = 0; i < w.size(); ++i) {
-      sum += w[i] > 0.0 ? w[i] * (std::log(w[i]) + ln_gamma[i] - d_[i]) : 0.0;
-    }
-    return sum;
-  }
-
- private:
-  struct Model {
-    double tm = 0.0;
-    SmallVector gradient;
-    SmallMatrix hessian;
-  };
-
-  /// W_i = exp(d_i - ln g_i(w)): the fixed-point form of s_i = 0. Zeros in `from` are allowed.
-  [[nodiscard]] Composition substitute(const Composition& from) const {
-    const Vec<double> ln_gamma = face_.ln_gamma(temperature_K_, normalised(from));
-    Composition W(from.size());
-    for (int i = 0; i < from.size(); ++i) {
-      W[i] = std::exp(std::clamp(d_[i] - ln_gamma[i], -kLargestExponent, kLargestExponent));
-    }
-    return W;
-  }
-
-  [[nodiscard]] Model evaluate(const Composition& W) const {
-    const int n = W.size();
-    const Composition w = normalised(W);
-    LnGammaGradient<double> model;
-    face_.ln_gamma_with_gradient(temperature_K_, w, model);
-    double total = 0.0;
-    for (const double value : W) {
-      total += value;
-    }
-    Model out;
-    out.tm = 1.0;
-    out.gradient.resize(n);
-    out.hessian.resize(n, n);
-    for (int i = 0; i < n; ++i) {
-      const double s = std::log(W[i]) + model.value[i] - d_[i];
-      out.tm += W[i] * (s - 1.0);
-      out.gradient(i) = std::sqrt(W[i]) * s;
-      double mean = 0.0;
-      for (int j = 0; j < n; ++j) {
-        mean += w[j] * model.d_dx(i, j);
-      }
-      for (int j = 0; j < n; ++j) {
-        out.hessian(i, j) = std::sqrt(W[i] * W[j]) * (model.d_dx(i, j) - mean) / total;
-      }
-      out.hessian(i, i) += 1.0 + 0.5 * s;
-    }
-    return out;
-  }
-
-  /// One Newton step with as much shift of the curvature as descent needs. False: no step lowers tm.
-  bool step(Composition& W, Model& here, double& shift) const {
-    const int n = W.size();
-    for (int attempt = 0; attempt < 40; ++attempt) {
-      SmallMatrix shifted = here.hessian;
-      shifted.diagonal().array() += shift;
-      const Eigen::LLT<SmallMatrix> factor(shifted);
-      if (factor.info() == Eigen::Success) {
-        const SmallVector change = factor.solve(here.gradient);
-        Composition trial(n);
-        for (int i = 0; i < n; ++i) {
-          const double root = std::sqrt(W[i]);
-          // Never through zero, where the form has a false stationary point.
-          const double moved = std::clamp(root - 0.5 * change(i), 0.2 * root, 3.0 * root + 0.1);
-          trial[i] = moved * moved;
-        }
-        Model there = evaluate(trial);
-        if (there.tm <= here.tm + 1e-15 * std::abs(here.tm) && trial != W) {
-          const bool better = there.tm < here.tm || there.gradient.norm() < here.gradient.norm();
-          if (better) {
-            W = trial;
-            here = there;
-            shift = shift > 1e-3 ? 0.1 * shift : 0.0;
-            return true;
-          }
-        }
-      }
-      shift = std::max(4.0 * shift, 1e-2);
-    }
-    return false;
-  }
-
-  const Mixture& face_;
-  double temperature_K_ = 0.0;
-  const Vec<double>& d_;
 };
 
 Softness softest_in_face(const Mixture& face, double temperature_K, const Composition& x) {
@@ -287,7 +137,7 @@ std::vector<Composition> further_starts(const Reference& reference, const Softne
   starts.push_back(Composition(n, 1.0 / n));
   Composition ideal(n);
   for (int i = 0; i < n; ++i) {
-    ideal[i] = std::exp(std::clamp(reference.d[i], -kLargestExponent, kLargestExponent));
+    ideal[i] = bounded_exp(reference.d[i]);
   }
   starts.push_back(normalised(ideal));
   starts.push_back(moved(reference.x, softness.direction, 1.0, 0.95));
@@ -341,7 +191,7 @@ StabilityResult test_face(const Mixture& face, double temperature_K, const Compo
     reference.d[i] += std::log(x[i]);
   }
   const Softness softness = softest_in_face(face, temperature_K, x);
-  const TangentPlaneDescent descent(face, temperature_K, reference);
+  const TangentPlaneDescent descent(face, temperature_K, reference.d);
   Findings found;
   found.w = x;
   search(descent, reference, first_starts(reference, softness, options, members), found);
