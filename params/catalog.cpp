@@ -85,6 +85,7 @@ Lookup Catalog::find(std::string_view name) const {
   if (const auto ambiguous = facts_.ambiguous_names.find(plain); ambiguous != facts_.ambiguous_names.end()) {
     result.status = LookupStatus::ambiguous;
     result.remark = ambiguous->second.why;
+    result.choices.reserve(ambiguous->second.choices.size());
     for (const std::string& id : ambiguous->second.choices) {
       result.choices.push_back(by_id(id));
     }
@@ -114,6 +115,7 @@ std::vector<const ComponentRecord*> Catalog::nearest(const std::string& plain) c
       entry->second = std::min(entry->second, distance);
     }
   }
+  ranked.reserve(best.size());
   for (const auto& [index, distance] : best) {
     ranked.emplace_back(distance, index);
   }

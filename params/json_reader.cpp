@@ -169,7 +169,7 @@ bool JsonNode::has(const char* key) const {
 }
 
 std::string JsonNode::text(const char* key) const {
-  const std::string result = optional_text(key);
+  std::string result = optional_text(key);
   if (!has(key)) {
     report_missing(key, "a text");
   } else if (result.empty() && find(key)->is_string()) {

@@ -40,7 +40,7 @@ class JsonNode {
   void report(std::string_view key, std::string found, std::string allowed, std::string remedy = {}) const;
 
   /// Reports every key that is not in the list. False when this is no object (reported too).
-  bool allow(std::initializer_list<const char*> keys) const;
+  [[nodiscard]] bool allow(std::initializer_list<const char*> keys) const;
   [[nodiscard]] bool has(const char* key) const;
 
   [[nodiscard]] std::string text(const char* key) const;  ///< required, not empty

@@ -40,7 +40,10 @@ Facts load_parameter_folder(const std::filesystem::path& folder) {
       continue;
     }
     // Name and length keep two sets of files with the same joined text apart.
-    all_text += file + '\n' + std::to_string(text.size()) + '\n' + text;
+    for (const std::string& part : {file, std::to_string(text.size()), text}) {
+      all_text += part;
+      all_text += '\n';
+    }
     const JsonFile parsed(file, text, &loading.problems);
     if (const auto root = parsed.root()) {
       table[k](*root, loading);
