@@ -270,7 +270,9 @@ class Walk {
         cut.start = *drawn;
       }
       cut.end = *drawn;
-      amount_ *= length(away) / length(minus(end, *drawn));
+      const double left = amount_ * length(away) / length(minus(end, *drawn));
+      cut.drift.push_back({*drawn, amount_ - left});
+      amount_ = left;
       pot_ = end;
       sliding_segment_ += forward ? 1 : -1;
       moving = sliding_segment_ >= 0 && sliding_segment_ + 1 < static_cast<int>(arc.points.size());
@@ -292,6 +294,7 @@ class Walk {
     }
     if (separation(cut.start, cut.end) < kOnBoundary) {
       cut.fixed_point = map_.node_at(cut.start, kOnBoundary);
+      cut.drift.clear();
     }
     cut.t_start_K = boiling_temperature_K_(cut.start);
     cut.t_end_K = boiling_temperature_K_(cut.end);

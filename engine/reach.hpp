@@ -45,6 +45,12 @@ struct Cut {
   Composition pot_start;
   Composition pot_end;
   std::string on;  ///< "interior", "face" or the id of a boundary
+  /// What leaves, piece by piece, while the cut drifts; the shares add up to `share`. Empty for a fixed composition.
+  struct Piece {
+    Composition x;
+    double share = 0.0;
+  };
+  std::vector<Piece> drift;
 };
 
 struct Batch {

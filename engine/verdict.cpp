@@ -80,7 +80,8 @@ Verdict verdict_of(const Candidate& best, double feed_fraction, int component) {
 const Receiver* keeper(const Question& question, const Receiver& chosen, int component) {
   const Receiver* most = nullptr;
   for (const Receiver& other : question.receivers) {
-    if (other.train == chosen.train && &other != &chosen && other.share * other.x[component] > kSmallestShare &&
+    if (other.train == chosen.train && !other.part && &other != &chosen &&
+        other.share * other.x[component] > kSmallestShare &&
         (most == nullptr || other.share * other.x[component] > most->share * most->x[component])) {
       most = &other;
     }
@@ -141,6 +142,29 @@ const char* ordinal(std::size_t k) {
   return k < std::size(kWords) ? kWords[k] : "later";
 }
 
+/// Receivers that take a drifting cut from its start up to each of its pieces, or from each piece to its end.
+void add_parts(std::vector<Receiver>& result, const Receiver& whole, const Cut& cut) {
+  const std::size_t pieces = cut.drift.size();
+  for (const bool from_start : {true, false}) {
+    Receiver part = whole;
+    part.part = true;
+    part.share = 0.0;
+    Composition moles(whole.x.size());
+    for (std::size_t k = 0; k + 1 < pieces; ++k) {
+      const Cut::Piece& piece = cut.drift[from_start ? k : pieces - 1 - k];
+      part.share += piece.share;
+      for (int i = 0; i < moles.size(); ++i) {
+        moles[i] += piece.share * piece.x[i];
+        part.x[i] = moles[i] / part.share;
+      }
+      const std::string permille = std::to_string(static_cast<int>(1000.0 * part.share / whole.share));
+      part.reading = whole.reading + (from_start ? " first " : " last ") + permille + "/1000";
+      part.words = std::string(from_start ? "the start of " : "the end of ") + whole.words;
+      result.push_back(part);
+    }
+  }
+}
+
 void add_batch(std::vector<Receiver>& result, const Batch& batch, int index, int train) {
   const std::string mode = batch.mode == Batch::Mode::rectifier ? "rectifier" : "stripper";
   const std::string prefix = "batch[" + std::to_string(index) + "].";
@@ -155,7 +179,8 @@ void add_batch(std::vector<Receiver>& result, const Batch& batch, int index, int
     receiver.boundary = cut.fixed_point.has_value() ? "" : cut.on;
     const bool last = k + 1 == batch.cuts.size() && k > 0;
     receiver.words = std::string("the ") + (last ? "last" : ordinal(k)) + " cut of a batch " + mode;
-    result.push_back(std::move(receiver));
+    result.push_back(receiver);
+    add_parts(result, receiver, cut);
   }
   if (!batch.heel.empty()) {
     Receiver heel;

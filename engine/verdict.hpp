@@ -1,7 +1,8 @@
 /// Verdict of one product from everything that can end up in a receiver.
 ///
 ///   receiver   one cut of a batch, what a batch leaves behind, or one final stream of a column sequence. Cuts are
-///              not blended: a receiver is changed where the cut changes.
+///              not blended: a receiver is changed where the cut changes. A drifting cut may also be taken in part,
+///              from its start or to its end.
 ///   R          largest recovery in one receiver that meets every purity and impurity test
 ///   u          purity limit: richest receiver
 ///
@@ -25,7 +26,8 @@ namespace stillshed {
 
 struct Receiver {
   std::string reading;  ///< "batch[0].cuts[1]" or "sequences[2].streams[0]"
-  int train = 0;        ///< receivers of one train together hold the charge
+  int train = 0;        ///< receivers of one train, parts left out, together hold the charge
+  bool part = false;    ///< part of a drifting cut
   Composition x;
   double share = 0.0;               ///< moles per mole of charge
   std::optional<int> fixed_point;   ///< index into Chart::fixed_points

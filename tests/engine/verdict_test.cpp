@@ -152,14 +152,29 @@ TEST(Verdict, StagesTurnOpenIntoTightAndNeverTheOtherWay) {
   EXPECT_EQ(bench.ask_mole(1, 0.99).verdict, Verdict::capped);
 }
 
-TEST(Verdict, DriftingCutIsNamedByItsBoundary) {
-  // Nothing but the drifting cut holds B.
-  const Bench bench(testing::walled_chart({{0.35, 0.25}}), {0.75, 0.05, 0.20});
-  const ProductOutcome outcome = bench.ask_mole(1, 0.995);
-  EXPECT_EQ(outcome.verdict, Verdict::capped);
-  EXPECT_EQ(bench.list.size() > 3, true);
-  EXPECT_LT(outcome.purity_limit_mole, 0.995);
-  EXPECT_FALSE(outcome.limited_by.empty());
+TEST(Verdict, DriftingCutMayBeTakenInPart) {
+  // From the pot (0.35, 0.25, 0.40) on, the wall is straight to C: the distillate is (7/12, 5/12, 0). Before, along the
+  // piece from the azeotrope, it is the azeotrope itself: the drift starts at 50 and ends at 41.67 mol% B.
+  const Chart chart = testing::walled_chart({{0.35, 0.25}});
+  const Composition feed = between({1.0, 0.0, 0.0}, {0.425, 0.375, 0.20}, 0.5);
+  Bench bench(chart, feed);
+  bench.list = receivers(bench.chart, bench.reach, {0});
+  bench.options.room = 0.0;
+  EXPECT_EQ(std::count_if(bench.list.begin(), bench.list.end(), [](const Receiver& r) { return r.part; }), 2);
+  const Cut& drift = bench.reach.batch[0].cuts.at(1);
+  ASSERT_EQ(drift.drift.size(), 2U);
+  EXPECT_NEAR(drift.drift[0].x[1], 0.5, 1e-12);
+  EXPECT_NEAR(drift.drift[1].x[1], 5.0 / 12.0, 1e-12);
+  EXPECT_NEAR(drift.drift[0].share, 0.25, 1e-12);  // 0.5 moles of pot, x_C from 0.2 to 0.4
+  EXPECT_NEAR(drift.drift[0].share + drift.drift[1].share, drift.share, 1e-12);
+  // A spec between the two is met by the start of the cut alone.
+  const ProductOutcome part = bench.ask_mole(1, 0.48);
+  EXPECT_EQ(part.verdict, Verdict::open);
+  EXPECT_NEAR(part.recovery, 0.25 * 0.5 / feed[1], 1e-12);
+  EXPECT_EQ(part.reading, "batch[0].cuts[1] first 625/1000");
+  // The whole cut holds 46.875 mol%.
+  EXPECT_EQ(bench.ask_mole(1, 0.46875 - 1e-6).reading, "batch[0].cuts[1]");
+  EXPECT_EQ(bench.ask_mole(1, 0.51).verdict, Verdict::capped);
 }
 
 TEST(Verdict, VerdictFollowsFromItsOwnTests) {
