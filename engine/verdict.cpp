@@ -157,7 +157,7 @@ void add_parts(std::vector<Receiver>& result, const Receiver& whole, const Cut& 
         moles[i] += piece.share * piece.x[i];
         part.x[i] = moles[i] / part.share;
       }
-      const std::string permille = std::to_string(static_cast<int>(1000.0 * part.share / whole.share));
+      const std::string permille = std::to_string(std::lround(1000.0 * part.share / whole.share));
       part.reading = whole.reading + (from_start ? " first " : " last ") + permille + "/1000";
       part.words = std::string(from_start ? "the start of " : "the end of ") + whole.words;
       result.push_back(part);

@@ -158,6 +158,7 @@ TEST(Verdict, DriftingCutMayBeTakenInPart) {
   const Chart chart = testing::walled_chart({{0.35, 0.25}});
   const Composition feed = between({1.0, 0.0, 0.0}, {0.425, 0.375, 0.20}, 0.5);
   Bench bench(chart, feed);
+  bench.reach.sequences.clear();  // the rectifier alone
   bench.list = receivers(bench.chart, bench.reach, {0});
   bench.options.room = 0.0;
   EXPECT_EQ(std::count_if(bench.list.begin(), bench.list.end(), [](const Receiver& r) { return r.part; }), 2);
