@@ -297,14 +297,14 @@ std::optional<int> region_at(const Chart& chart, const Composition& x) {
 
 std::optional<RayEnd> farthest_on_ray(const std::vector<Composition>& polygon, const Composition& origin,
                                       const Composition& through) {
-  constexpr double kSlack = 1e-12;
   const Composition ray = minus(through, origin);
   const double length2 = ray[0] * ray[0] + ray[1] * ray[1];
+  const double slack = 1e-12 * std::sqrt(length2);  // a vertex this close to the ray lies on it
   std::optional<RayEnd> best;
   const auto offer = [&](const Composition& point) {
     const Composition away = minus(point, origin);
     const double t = (away[0] * ray[0] + away[1] * ray[1]) / length2;
-    if (t > kSlack && (!best.has_value() || t > best->t)) {
+    if (t > 0.0 && separation(point, origin) > 1e-12 && (!best.has_value() || t > best->t)) {
       best = RayEnd{t, point};
     }
   };
@@ -313,10 +313,10 @@ std::optional<RayEnd> farthest_on_ray(const std::vector<Composition>& polygon, c
     const Composition& b = polygon[(k + 1) % polygon.size()];
     const double side_a = cross(ray, minus(a, origin));
     const double side_b = cross(ray, minus(b, origin));
-    if (std::abs(side_a) <= kSlack) {
+    if (std::abs(side_a) <= slack) {
       offer(a);
     }
-    if (std::abs(side_a) > kSlack && std::abs(side_b) > kSlack && (side_a > 0.0) != (side_b > 0.0)) {
+    if (std::abs(side_a) > slack && std::abs(side_b) > slack && (side_a > 0.0) != (side_b > 0.0)) {
       offer(between(a, b, side_a / (side_a - side_b)));
     }
   }

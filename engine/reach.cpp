@@ -131,6 +131,9 @@ Reach reach(const Mixture& mixture, const Survey& survey, const Chart& chart, co
     const bool first_side = result.products.empty();
     for (std::size_t k = 0; k < products.size(); ++k) {
       ProductOutcome outcome = judge({mixture, chart, x, list, options}, products[k]);
+      if (result.status != Status::complete && outcome.verdict != Verdict::open) {
+        outcome = no_call(mixture, products[k], {Reason::not_converged, result.message});  // more receivers might help
+      }
       if (first_side) {
         result.products.push_back(std::move(outcome));
       } else if (worse(outcome, result.products[k])) {
