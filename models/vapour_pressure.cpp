@@ -1,14 +1,13 @@
 #include "models/vapour_pressure.hpp"
 
-#include <array>
 #include <cmath>
 #include <limits>
 #include <optional>
-#include <span>
 #include <string>
 #include <utility>
 #include <vector>
 
+#include "models/wagner.hpp"
 #include "params/errors.hpp"
 
 namespace stillshed {
@@ -16,32 +15,6 @@ namespace {
 
 constexpr double kAtmosphere_Pa = 101325.0;
 constexpr double kInfinity = std::numeric_limits<double>::infinity();
-
-struct WagnerTerm {
-  double exponent;
-  std::size_t coefficient;  ///< index in PressureSet::coefficients
-};
-constexpr std::array<WagnerTerm, 4> kWagner25{{{1.0, 0}, {1.5, 1}, {2.5, 2}, {5.0, 3}}};
-constexpr std::array<WagnerTerm, 4> kWagner36{{{1.0, 0}, {1.5, 1}, {3.0, 2}, {6.0, 3}}};
-constexpr std::array<WagnerTerm, 6> kWagnerWater{{{1.0, 0}, {1.5, 1}, {3.0, 2}, {3.5, 3}, {4.0, 4}, {7.5, 5}}};
-
-std::span<const WagnerTerm> wagner_terms(PressureForm form) {
-  switch (form) {
-    case PressureForm::wagner_25: return kWagner25;
-    case PressureForm::wagner_36: return kWagner36;
-    case PressureForm::wagner_water: return kWagnerWater;
-    default: return {};
-  }
-}
-bool is_wagner(PressureForm form) {
-  return !wagner_terms(form).empty();
-}
-double critical_K(const PressureSet& set) {
-  return set.coefficients[wagner_terms(set.form).size()];
-}
-double critical_Pa(const PressureSet& set) {
-  return set.coefficients[wagner_terms(set.form).size() + 1];
-}
 
 std::size_t coefficient_count(PressureForm form) {
   switch (form) {
@@ -52,42 +25,12 @@ std::size_t coefficient_count(PressureForm form) {
   }
 }
 
-/// z^k for a whole or half-odd k >= 0: products and one square root, much cheaper than pow.
-template <class S>
-S half_power(const S& z, double k) {
-  using std::sqrt;
-  const int whole = static_cast<int>(k);
-  S result = k > whole ? sqrt(z) : S(1.0);
-  for (int i = 0; i < whole; ++i) {
-    result = result * z;
-  }
-  return result;
-}
 /// T^k for any real k, T > 0.
 template <class S>
 S real_power(const S& T, double k) {
   using std::exp;
   using std::log;
   return k >= 0.0 && k == std::floor(k) && k <= 8.0 ? half_power(T, k) : exp(k * log(T));
-}
-
-/// t = 1 - T/Tc; never negative, because the range of the formula ends at Tc.
-double reduced(double T, double Tc) {
-  return 1.0 - T / Tc;
-}
-Interval reduced(const Interval& T, double Tc) {
-  return (1.0 - T / Tc).not_negative();
-}
-
-/// k t^(k-1) - (k-1) t^k for t in [0, 1]: rises with t, so the end points of an interval enclose it.
-double wagner_bracket(double t, double k) {
-  return half_power(t, k - 1.0) * (1.0 + (k - 1.0) * (1.0 - t));
-}
-Interval wagner_bracket(const Interval& t, double k) {
-  const auto at = [k](double end) {
-    return half_power(Interval(end), k - 1.0) * (1.0 + (k - 1.0) * (1.0 - Interval(end)));
-  };
-  return {at(t.lower()).lower(), at(std::min(t.upper(), 1.0)).upper()};
 }
 
 Enclosed ln_of(double value) {

@@ -78,9 +78,14 @@ const GroupTable& group_table(GroupModel model) {
   return tables[static_cast<std::size_t>(model)];
 }
 
+GroupAssignment groups(const std::vector<GroupCount>& counts) {
+  GroupAssignment result;
+  result.groups = counts;
+  return result;
+}
+
 GroupMixture ethanol_benzene_water() {
-  return {{"ethanol", "benzene", "water"},
-          {{{{1, 1}, {2, 1}, {14, 1}}, false, ""}, {{{9, 6}}, false, ""}, {{{16, 1}}, false, ""}}};
+  return {{"ethanol", "benzene", "water"}, {groups({{1, 1}, {2, 1}, {14, 1}}), groups({{9, 6}}), groups({{16, 1}})}};
 }
 
 Unifac unifac(GroupModel model, const GroupMixture& mixture) {

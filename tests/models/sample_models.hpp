@@ -21,6 +21,7 @@ namespace stillshed::samples {
 
 /// The group tables and assignments carried with the reference vectors (tests/reference/activity_vectors.json).
 [[nodiscard]] const GroupTable& group_table(GroupModel model);
+[[nodiscard]] GroupAssignment groups(const std::vector<GroupCount>& counts);
 struct GroupMixture {
   std::vector<std::string> names;
   std::vector<GroupAssignment> groups;

@@ -2,6 +2,7 @@
 
 #include <gmock/gmock.h>
 
+#include "params/load.hpp"
 #include "tests/models/sample_models.hpp"
 #include "tests/support/laws.hpp"
 
@@ -15,6 +16,38 @@ TEST(Unifac, OriginalObeysTheLaws) {
 TEST(Unifac, DortmundObeysTheLaws) {
   laws::expect_activity_laws(samples::unifac(GroupModel::dortmund, samples::ethanol_benzene_water()),
                              {.name = "unifac-dortmund"});
+}
+
+// The reference vectors carry their own tables; those on file must be the same numbers.
+TEST(Unifac, TablesOfTheReferenceVectorsAreThoseOnFile) {
+  const Facts facts = load_parameter_folder(STILLSHED_TEST_DATA "/../params");
+  for (const GroupModel kind : {GroupModel::unifac, GroupModel::dortmund}) {
+    const GroupTable& ours = samples::group_table(kind);
+    const GroupTable& on_file = kind == GroupModel::unifac ? facts.unifac : facts.dortmund;
+    EXPECT_EQ(ours.combinatorial_exponent, on_file.combinatorial_exponent);
+    for (const auto& [id, subgroup] : ours.subgroups) {
+      ASSERT_EQ(on_file.subgroups.count(id), 1U) << id;
+      EXPECT_EQ(subgroup.R, on_file.subgroups.at(id).R) << id;
+      EXPECT_EQ(subgroup.Q, on_file.subgroups.at(id).Q) << id;
+      EXPECT_EQ(subgroup.main_group, on_file.subgroups.at(id).main_group) << id;
+    }
+    for (const auto& [pair, value] : ours.interactions) {
+      ASSERT_EQ(on_file.interactions.count(pair), 1U) << pair.first << "-" << pair.second;
+      EXPECT_EQ(value.a_K, on_file.interactions.at(pair).a_K) << pair.first << "-" << pair.second;
+      EXPECT_EQ(value.b, on_file.interactions.at(pair).b);
+      EXPECT_EQ(value.c_per_K, on_file.interactions.at(pair).c_per_K);
+    }
+  }
+}
+
+TEST(Unifac, FiveComponentsObeyTheLaws) {
+  const samples::GroupMixture five{
+      {"acetone", "methanol", "water", "n-hexane", "benzene"},
+      {samples::groups({{1, 1}, {18, 1}}), samples::groups({{15, 1}}), samples::groups({{16, 1}}),
+       samples::groups({{1, 2}, {2, 4}}), samples::groups({{9, 6}})}};
+  for (const GroupModel kind : {GroupModel::unifac, GroupModel::dortmund}) {
+    laws::expect_activity_laws(samples::unifac(kind, five), {.name = "five components", .points = 60});
+  }
 }
 
 TEST(Unifac, MissingGroupPairIsNamedAndNeverZero) {

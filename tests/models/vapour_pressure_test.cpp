@@ -8,6 +8,8 @@
 #include <vector>
 
 #include "params/errors.hpp"
+#include "params/load.hpp"
+#include "params/pressure_check.hpp"
 
 namespace stillshed {
 namespace {
@@ -213,6 +215,34 @@ TEST(PressureCurve, BoilingPointInverts) {
   EXPECT_TRUE(std::isinf(PressureCurve(simple()).boiling_point_K(1e30)));
   EXPECT_EQ(PressureCurve(simple()).boiling_point_K(0.0), 0.0);
   EXPECT_TRUE(std::isnan(PressureCurve(simple()).boiling_point_K(-1.0)));
+}
+
+TEST(PressureCurve, EverySetOnFileIsCertifiedAndAgreesWithPlainEvaluation) {
+  const Facts facts = load_parameter_folder(STILLSHED_TEST_DATA "/../params");
+  int sets = 0;
+  for (const ComponentRecord& component : facts.components) {
+    for (const PressureSet& set : component.pressure_sets) {
+      SCOPED_TRACE(set.id);
+      const PressureCurve curve(set);
+      ASSERT_TRUE(set.t_min_K && set.t_max_K);
+      for (int k = 0; k <= 10; ++k) {
+        const double T = *set.t_min_K + 0.1 * k * (*set.t_max_K - *set.t_min_K);
+        const double plain = plain_ln_pressure(set, T);
+        ASSERT_NEAR(curve.ln_psat(T), plain, 1e-11 * (1.0 + std::abs(plain)));
+        const Interval value = curve.ln_psat(Interval(T));
+        ASSERT_TRUE(value.contains(curve.ln_psat(T)));
+        ASSERT_LT(value.width(), 2e-10);
+        const Interval slope = curve.d_ln_psat_dT(Interval(T));
+        ASSERT_TRUE(slope.contains(curve.d_ln_psat_dT(T)));
+      }
+      const double Tb = curve.boiling_point_K(101325.0);
+      ASSERT_TRUE(curve.temperature_at(Interval(std::log(101325.0))).contains(Tb));
+      const Interval around(Tb - 5.0, Tb + 5.0);
+      ASSERT_TRUE(curve.d_ln_psat_dT(around).is_positive());
+      ++sets;
+    }
+  }
+  EXPECT_GT(sets, 900);
 }
 
 TEST(PressureCurve, RefusesWhatDoesNotRise) {
