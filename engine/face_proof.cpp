@@ -17,8 +17,10 @@ constexpr double kWidthGrowth = 4.0;
 constexpr double kFirstRadius = 0.02;
 constexpr double kLargestRadius = 0.7;
 constexpr double kSmallestRadius = 1e-11;
-/// A side this much shorter than the widest one is not halved.
-constexpr double kSliver = 1e-7;
+/// A side this much shorter than the widest one is not halved. Group-contribution models are the reason for so large a
+/// share: over the whole temperature bracket their gradients are so wide that composition seems to be all that matters,
+/// and without it boxes are sliced in composition with the bracket left whole.
+constexpr double kSliver = 0.1;
 
 struct KnownRoot {
   LocatedRoot root;
