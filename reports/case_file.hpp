@@ -40,7 +40,10 @@ struct ProductWish {
 struct Case {
   std::string title;
   std::vector<StreamEntry> stream;        ///< order of the input; fixes the order of every matrix
-  double residue_mass_fraction = 0.0;
+  double residue_mass_fraction = 0.0;     ///< everything that does not boil: residue, salts, unknowns
+  double salt_mass_fraction = 0.0;        ///< part of the residue
+  double unknown_mass_fraction = 0.0;     ///< part of the residue: "unknown", "others"
+  std::vector<std::string> salts;         ///< names as given
   std::optional<double> amount_kg;
   double pressure_Pa = 101325.0;
   std::string given_pressure;
@@ -49,6 +52,7 @@ struct Case {
   std::vector<std::optional<MixtureComponent>> user_components;  ///< per stream entry
   std::vector<ProductWish> products;
   Plant plant;
+  std::vector<std::string> declared;      ///< history, region and use that bring up cautions
   std::vector<std::string> notes;         ///< rescaled sums, densities used, unit readings
   std::string echo_json;                  ///< the input as read, for the result's echo
 };
