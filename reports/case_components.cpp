@@ -66,7 +66,7 @@ std::optional<PressureCurve> read_pressure_curve(CaseContext& context, const std
   const FormKeys* form = name.has_value() ? find_form(*name) : nullptr;
   if (form == nullptr) {
     if (name.has_value()) {
-      context.refuse(pointer_join(pointer, "form"), "\"" + *name + "\"", form_names());
+      context.refuse(pointer_join(pointer, "form"), in_quotes(*name), form_names());
     }
     return std::nullopt;
   }
@@ -120,7 +120,7 @@ std::optional<CaseComponent> read_own_component(CaseContext& context, const std:
   if (json.contains("id")) {
     own.id = read_text(context, pointer_join(pointer, "id"), json.at("id"), "a name").value_or("?");
     if (own.id.empty() || nonvolatile_kind(own.id) == NonvolatileKind::residue) {
-      context.refuse(pointer_join(pointer, "id"), "\"" + own.id + "\"", "a name that is not reserved");
+      context.refuse(pointer_join(pointer, "id"), in_quotes(own.id), "a name that is not reserved");
     }
   }
   const auto optional_positive = [&](const char* key) -> std::optional<double> {
@@ -181,7 +181,7 @@ std::vector<CaseComponent> read_components(CaseContext& context, const OrderedJs
     }
     for (const CaseComponent& other : components) {
       if (other.entry.id == component->entry.id) {
-        context.refuse(pointer, "\"" + component->entry.given_name + "\", the same as \"" + other.entry.given_name + "\"",
+        context.refuse(pointer, in_quotes(component->entry.given_name) + ", the same as " + in_quotes(other.entry.given_name),
                        "each component once");
       }
     }

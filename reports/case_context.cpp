@@ -78,7 +78,7 @@ bool read_object(CaseContext& context, const std::string& pointer, const Ordered
     if (std::find(allowed.begin(), allowed.end(), item.key()) == allowed.end()) {
       const std::string near = nearest_word(item.key(), allowed);
       context.refuse(pointer_join(pointer, item.key()), "an unknown key", list,
-                     near.empty() ? "" : "did you mean \"" + near + "\"?");
+                     near.empty() ? "" : "did you mean " + in_quotes(near) + "?");
     }
   }
   return true;

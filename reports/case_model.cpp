@@ -197,7 +197,7 @@ std::optional<ActivityModel> ModelReader::read() {
     return unless_wrong([&] { return Uniquac(parameters); });
   }
   const std::string near = nearest_word(kind, {"margules", "redlich-kister", "nrtl", "wilson", "uniquac"});
-  context_.refuse(at("kind"), "\"" + kind + "\"", kKinds, near.empty() ? "" : "did you mean \"" + near + "\"?");
+  context_.refuse(at("kind"), in_quotes(kind), kKinds, near.empty() ? "" : "did you mean " + in_quotes(near) + "?");
   return std::nullopt;
 }
 

@@ -15,7 +15,7 @@ bool read_test_value(CaseContext& context, const std::string& pointer, const std
   std::string why;
   const std::optional<Quantity> quantity = read_quantity(right, why);
   if (!quantity.has_value() || quantity->low.has_value()) {
-    context.refuse(pointer, "\"" + text + "\"" + (why.empty() ? "" : " (" + why + ")"), kTestForms);
+    context.refuse(pointer, in_quotes(text) + (why.empty() ? "" : " (" + why + ")"), kTestForms);
     return false;
   }
   const UnitWord* unit = find_unit(quantity->unit);
@@ -29,7 +29,7 @@ bool read_test_value(CaseContext& context, const std::string& pointer, const std
     test.basis = Basis::mole;
   } else {
     const std::string reason = quantity->unit.empty() ? "no unit" : why_refused(quantity->unit);
-    context.refuse(pointer, "\"" + text + "\"" + (reason.empty() ? "" : " (" + reason + ")"),
+    context.refuse(pointer, in_quotes(text) + (reason.empty() ? "" : " (" + reason + ")"),
                    test.what == ProductTest::What::recovery
                        ? "%"
                        : allowed_units(Dimension::mass_fraction) + ", " + allowed_units(Dimension::mole_fraction));
@@ -38,7 +38,7 @@ bool read_test_value(CaseContext& context, const std::string& pointer, const std
   const bool purity = test.what == ProductTest::What::purity;
   const bool below_one = purity ? test.value < 1.0 : test.value <= 1.0;
   if (!(test.value > 0.0) || !below_one) {
-    context.refuse(pointer, "\"" + text + "\"", purity ? "a purity above 0 and below 100 %" : "a share above 0, up to 100 %");
+    context.refuse(pointer, in_quotes(text), purity ? "a purity above 0 and below 100 %" : "a share above 0, up to 100 %");
     return false;
   }
   return true;
@@ -49,7 +49,7 @@ std::optional<ProductTest> read_test(CaseContext& context, const std::string& po
   const std::string text = plain_text(given);
   const std::size_t at = text.find_first_of("<>");
   if (at == std::string::npos || text.substr(at + 1, 1) != "=") {
-    context.refuse(pointer, "\"" + given + "\"", kTestForms, "say which side: >= or <=");
+    context.refuse(pointer, in_quotes(given), kTestForms, "say which side: >= or <=");
     return std::nullopt;
   }
   ProductTest test;
@@ -68,7 +68,7 @@ std::optional<ProductTest> read_test(CaseContext& context, const std::string& po
   }
   const bool wants_more = test.what != ProductTest::What::impurity;
   if (wants_more != test.at_least) {
-    context.refuse(pointer, "\"" + given + "\"",
+    context.refuse(pointer, in_quotes(given),
                    wants_more ? ">= for a purity or a recovery" : "<= for an impurity", "");
     return std::nullopt;
   }
@@ -101,7 +101,7 @@ std::optional<int> find_component(CaseContext& context, const std::string& point
       }
     }
   }
-  context.refuse(pointer, "\"" + plain + "\", which is not in the stream", list);
+  context.refuse(pointer, in_quotes(plain) + ", which is not in the stream", list);
   return std::nullopt;
 }
 

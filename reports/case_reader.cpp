@@ -37,7 +37,7 @@ void read_declared(CaseContext& context, const OrderedJson& json, Case& result) 
     if (std::find(words.begin(), words.end(), word) != words.end()) {
       result.declared.push_back(word);
     } else if (!word.empty()) {
-      context.refuse(pointer, "\"" + word + "\"", allowed);
+      context.refuse(pointer, in_quotes(word), allowed);
     }
   }
 }
@@ -77,15 +77,15 @@ void read_model_choice(CaseContext& context, const OrderedJson& json, const std:
     if (std::find(kModels.begin(), kModels.end(), *name) == kModels.end()) {
       const bool needs_numbers = *name == "nrtl" || *name == "wilson" || *name == "uniquac" || *name == "margules";
       const std::string near = nearest_word(*name, kModels);
-      context.refuse("/model", "\"" + *name + "\"", kModelForms,
+      context.refuse("/model", in_quotes(*name), kModelForms,
                      needs_numbers ? "no " + *name + " records are on file: give the parameters as an object"
-                                   : (near.empty() ? "" : "did you mean \"" + near + "\"?"));
+                                   : (near.empty() ? "" : "did you mean " + in_quotes(near) + "?"));
       return;
     }
     result.model = *name;
   }
   if (own && result.model != "ideal") {
-    context.refuse("/model", "\"" + result.model + "\" with components defined outright",
+    context.refuse("/model", in_quotes(result.model) + " with components defined outright",
                    "\"ideal\", or an object with your own parameters",
                    "the groups of a component defined outright are not known");
   }

@@ -36,7 +36,7 @@ std::optional<std::size_t> find_declared(CaseContext& context, const std::string
       }
     }
   }
-  context.refuse(pointer, "\"" + name + "\"", "the names in \"components\": " + list,
+  context.refuse(pointer, in_quotes(name), "the names in \"components\": " + list,
                  "add it to \"components\", which fixes the order of every matrix");
   return std::nullopt;
 }
@@ -44,7 +44,7 @@ std::optional<std::size_t> find_declared(CaseContext& context, const std::string
 void add_amount(CaseContext& context, CaseComponent& component, const std::string& name, const std::string& pointer,
                 const OrderedJson& json) {
   if (!component.pointer.empty()) {
-    context.refuse(pointer, "\"" + name + "\", the same as \"" + component.entry.given_name + "\"",
+    context.refuse(pointer, in_quotes(name) + ", the same as " + in_quotes(component.entry.given_name),
                    "each component once", "add the amounts up");
     return;
   }

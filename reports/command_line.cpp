@@ -88,8 +88,8 @@ const TaskWords& find_task(const std::string& word) {
     allowed += (allowed.empty() ? "" : ", ") + name;
   }
   const std::string near = nearest_word(word, names);
-  throw InputError(Problem{"command line", "\"" + word + "\"", "a task: " + allowed,
-                           near.empty() ? "see stillshed --help" : "did you mean \"" + near + "\"?"});
+  throw InputError(Problem{"command line", in_quotes(word), "a task: " + allowed,
+                           near.empty() ? "see stillshed --help" : "did you mean " + in_quotes(near) + "?"});
 }
 
 /// A quick form or one file, not both.
@@ -108,7 +108,7 @@ void sort_words(Command& command) {
   if (command.form.stream.empty() || !files.empty()) {
     std::string found = files.empty() ? "no stream" : "";
     for (const std::string& file : files) {
-      found += (found.empty() ? "\"" : ", \"") + file + "\"";
+      found += (found.empty() ? "" : ", ") + in_quotes(file);
     }
     throw InputError(Problem{"command line", found, "one case file, or NAME=AMOUNT for every component",
                              "example: stillshed report acetone=42 methanol=33 water=25 --basis wt%"});

@@ -98,7 +98,7 @@ const UnitWord* unit_of(const Quantity& quantity, std::string_view text, std::sp
   for (const Dimension dimension : dimensions) {
     allowed += (allowed.empty() ? "" : ", ") + allowed_units(dimension);
   }
-  std::string found = "\"" + std::string(text) + "\"";
+  std::string found = in_quotes(text);
   if (quantity.unit.empty()) {
     found += " without a unit";
   } else if (const std::string why = why_refused(quantity.unit); !why.empty()) {
@@ -115,12 +115,19 @@ std::optional<Quantity> quantity_or_problem(std::string_view text, const std::st
   std::string why;
   std::optional<Quantity> quantity = read_quantity(text, why);
   if (!quantity.has_value()) {
-    problems.push_back({where, "\"" + std::string(text) + "\" (" + why + ")", allowed, ""});
+    problems.push_back({where, in_quotes(text) + " (" + why + ")", allowed, ""});
   }
   return quantity;
 }
 
 }  // namespace
+
+std::string in_quotes(std::string_view text) {
+  std::string result = "\"";
+  result.append(text);
+  result.push_back('"');
+  return result;
+}
 
 std::string plain_text(std::string_view text) {
   static constexpr std::array<std::pair<std::string_view, std::string_view>, 13> kPlain = {{
@@ -243,7 +250,7 @@ std::optional<double> read_pressure_Pa(std::string_view text, const std::string&
   }
   const double pressure = unit->to_si(quantity->value);
   if (quantity->low.has_value() || !(pressure > 0.0) || !std::isfinite(pressure)) {
-    problems.push_back({where, "\"" + std::string(text) + "\"", "one absolute pressure above zero", ""});
+    problems.push_back({where, in_quotes(text), "one absolute pressure above zero", ""});
     return std::nullopt;
   }
   return pressure;
@@ -265,7 +272,7 @@ std::optional<double> read_temperature_K(std::string_view text, const std::strin
   }
   const double temperature = unit->to_si(quantity->value);
   if (quantity->low.has_value() || !(temperature > 0.0) || !std::isfinite(temperature)) {
-    problems.push_back({where, "\"" + std::string(text) + "\"", "one temperature above absolute zero", ""});
+    problems.push_back({where, in_quotes(text), "one temperature above absolute zero", ""});
     return std::nullopt;
   }
   return temperature;
@@ -285,7 +292,7 @@ std::optional<AmountReading> amount_in(std::string_view text, std::span<const Di
     return std::nullopt;
   }
   if (quantity->low.value_or(quantity->value) < 0.0) {
-    problems.push_back({where, "\"" + std::string(text) + "\" (below zero)", "an amount of zero or more", ""});
+    problems.push_back({where, in_quotes(text) + " (below zero)", "an amount of zero or more", ""});
     return std::nullopt;
   }
   AmountReading reading;
@@ -316,7 +323,7 @@ std::optional<AmountReading> read_total(std::string_view text, const std::string
   static constexpr std::array kTotal = {Dimension::mass, Dimension::amount};
   std::optional<AmountReading> reading = amount_in(text, kTotal, where, problems);
   if (reading.has_value() && (reading->low.has_value() || !(reading->value > 0.0))) {
-    problems.push_back({where, "\"" + std::string(text) + "\"", "one amount above zero", ""});
+    problems.push_back({where, in_quotes(text), "one amount above zero", ""});
     return std::nullopt;
   }
   return reading;

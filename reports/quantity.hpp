@@ -25,6 +25,9 @@ struct Quantity {
   std::string unit;  ///< as written; may be empty
 };
 
+/// The text between double quotes.
+[[nodiscard]] std::string in_quotes(std::string_view text);
+
 /// Plain ASCII for typographic blanks, dashes, minus signs and comparison signs; outer blanks removed.
 [[nodiscard]] std::string plain_text(std::string_view text);
 

@@ -25,7 +25,7 @@ void write_stream(const QuickForm& form, OrderedJson& json, SpokenWords& spoken,
   if (!form.basis.empty() && (unit == nullptr || unit->dimension == Dimension::pressure ||
                               unit->dimension == Dimension::temperature)) {
     const std::string why = why_refused(form.basis);
-    problems.push_back({std::string(kSource) + "--basis", "\"" + form.basis + "\"" + (why.empty() ? "" : " (" + why + ")"),
+    problems.push_back({std::string(kSource) + "--basis", in_quotes(form.basis) + (why.empty() ? "" : " (" + why + ")"),
                         "wt%, mol%, vol%, kg, mol, L", ""});
     return;
   }
@@ -39,7 +39,7 @@ void write_stream(const QuickForm& form, OrderedJson& json, SpokenWords& spoken,
       continue;
     }
     if (stream.contains(name)) {
-      problems.push_back({kSource + word, "\"" + name + "\" twice", "each component once", "add the amounts up"});
+      problems.push_back({kSource + word, in_quotes(name) + " twice", "each component once", "add the amounts up"});
       continue;
     }
     const bool residue = name == "residue" || name == "solids";
@@ -65,7 +65,7 @@ void write_product(const std::string& words, OrderedJson& products, SpokenWords&
   }
   name = plain_text(name);
   if (name.empty()) {
-    problems.push_back({std::string(kSource) + "--product", "\"" + words + "\"", "\"acetone >= 99.5 wt%\"",
+    problems.push_back({std::string(kSource) + "--product", in_quotes(words), "\"acetone >= 99.5 wt%\"",
                         "say which product"});
     return;
   }
@@ -76,7 +76,7 @@ void write_product(const std::string& words, OrderedJson& products, SpokenWords&
   if (!test.empty()) {
     list.push_back(test);
   }
-  spoken[pointer_join("/products", name)] = "--product \"" + words + "\"";
+  spoken[pointer_join("/products", name)] = "--product " + in_quotes(words);
 }
 
 }  // namespace
@@ -90,7 +90,7 @@ void write_quick_form(const QuickForm& form, OrderedJson& json, SpokenWords& spo
   const auto replace = [&](const char* key, const std::string& value, const char* option) {
     if (!value.empty()) {
       json[key] = value;
-      spoken[std::string("/") + key] = std::string(option) + " \"" + value + "\"";
+      spoken[std::string("/") + key] = std::string(option) + " " + in_quotes(value);
     }
   };
   replace("title", form.title, "--title");

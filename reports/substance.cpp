@@ -4,6 +4,7 @@
 #include <array>
 
 #include "params/names.hpp"
+#include "reports/quantity.hpp"
 
 namespace stillshed {
 namespace {
@@ -56,10 +57,10 @@ std::string substance_choices(const Lookup& lookup) {
 Problem substance_problem(const std::string& where, const std::string& name, const Lookup& lookup) {
   const std::string choices = substance_choices(lookup);
   if (lookup.status == LookupStatus::ambiguous) {
-    return {where, "\"" + name + "\", an ambiguous name" + (lookup.remark.empty() ? "" : " (" + lookup.remark + ")"),
+    return {where, in_quotes(name) + ", an ambiguous name" + (lookup.remark.empty() ? "" : " (" + lookup.remark + ")"),
             choices.empty() ? "an unambiguous name or a CAS number" : choices, ""};
   }
-  return {where, "\"" + name + "\", not on file" + (lookup.remark.empty() ? "" : " (" + lookup.remark + ")"),
+  return {where, in_quotes(name) + ", not on file" + (lookup.remark.empty() ? "" : " (" + lookup.remark + ")"),
           "an id, name, synonym or CAS number on file", choices.empty() ? "" : "nearest: " + choices};
 }
 
