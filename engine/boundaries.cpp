@@ -71,7 +71,7 @@ BoundarySet find_boundaries(const Mixture& mixture, double pressure_Pa, const st
   BoundarySet set;
   set.status = Status::complete;
   TraceOptions options;
-  options.chord = 0.1 * error;
+  options.chord = 0.01 * error;  // the nearest point of a chord wanders along the curve by the root of this
   options.capture = std::min(2.0 * error, 2e-4);
   options.tolerance = std::min(1e-9, 1e-5 * error);
   for (std::size_t k = 0; k < fixed_points.size(); ++k) {

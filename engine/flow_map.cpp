@@ -59,14 +59,6 @@ Composition minus(const Composition& a, const Composition& b) {
   return result;
 }
 
-Composition between(const Composition& a, const Composition& b, double s) {
-  Composition result(a.size());
-  for (int i = 0; i < a.size(); ++i) {
-    result[i] = (1.0 - s) * a[i] + s * b[i];
-  }
-  return result;
-}
-
 double separation(const Composition& a, const Composition& b) {
   double largest = 0.0;
   for (int i = 0; i < a.size(); ++i) {

@@ -18,6 +18,7 @@
 #include <vector>
 
 #include "engine/chart.hpp"
+#include "engine/geometry.hpp"
 
 namespace stillshed {
 
@@ -77,8 +78,6 @@ class FlowMap {
 /// left of a. Arguments are differences of compositions.
 [[nodiscard]] double cross(const Composition& a, const Composition& b);
 [[nodiscard]] Composition minus(const Composition& a, const Composition& b);
-/// a + s (b - a)
-[[nodiscard]] Composition between(const Composition& a, const Composition& b, double s);
 /// Largest difference of two compositions.
 [[nodiscard]] double separation(const Composition& a, const Composition& b);
 [[nodiscard]] Members present(const Composition& x);  ///< indices with x_i > 0
