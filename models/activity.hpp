@@ -2,9 +2,13 @@
 ///
 /// Every model is a class with
 ///     template <class S> Vec<S> ln_gamma(const S& temperature_K, const Vec<S>& x) const;
+///     template <class S> void ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& x,
+///                                                    LnGammaGradient<S>& out) const;   // analytic, models/gradient.hpp
 ///     int size() const;
-///     Model face(const Members& members) const;   // the same model for some of the components
-/// and a parameter struct checked at construction (InputError lists every bad entry).
+///     bool depends_on_temperature() const;
+///     Model face(const Members& members) const;   // the same model for some of the components, in the order given
+/// and parameters checked at construction (InputError lists every bad entry). Sums over mole fractions go through
+/// models/means.hpp: that is what makes the Interval results tight.
 #pragma once
 
 #include <variant>

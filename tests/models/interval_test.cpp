@@ -55,7 +55,7 @@ class Operands {
     switch (random_() % 16) {
       case 0: return 0.0;
       case 1: return random_() % 2 == 0 ? 1.0 : -1.0;
-      case 2: return uniform(-1.0, 1.0) * 1e-150;
+      case 2: return uniform(-1.0, 1.0) * 1e-160;  // products of two underflow
       case 3: return uniform(-1.0, 1.0) * 1e150;
       default: return (random_() % 2 == 0 ? 1.0 : -1.0) * std::pow(10.0, uniform(-12.0, 12.0));
     }
