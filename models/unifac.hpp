@@ -34,6 +34,33 @@ struct UnifacOptions {
   bool fill_missing = false;
 };
 
+/// a/T + b + c T.
+template <class S>
+[[nodiscard]] S group_exponent(const GroupInteraction& p, const S& T, const S& inverse_T) {
+  S exponent = p.a_K * inverse_T + p.b;
+  if (p.c_per_K != 0.0) {
+    exponent += p.c_per_K * T;
+  }
+  return exponent;
+}
+/// The same over an interval of T. Where a and c have one sign the two terms run against each other and their separate
+/// ranges add up to far too much: the range is that of the end points and, where the slope c - a/T^2 may vanish, of the
+/// extreme value b +- 2 sqrt(a c).
+[[nodiscard]] inline Interval group_exponent(const GroupInteraction& p, const Interval& T, const Interval& inverse_T) {
+  const Interval natural = group_exponent<Interval>(p, T, inverse_T);
+  if (!(p.a_K > 0.0 && p.c_per_K > 0.0) && !(p.a_K < 0.0 && p.c_per_K < 0.0)) {
+    return natural;
+  }
+  const Interval low(T.lower());
+  const Interval high(T.upper());
+  Interval range = hull(group_exponent<Interval>(p, low, 1.0 / low), group_exponent<Interval>(p, high, 1.0 / high));
+  if ((p.c_per_K - p.a_K * square(inverse_T)).contains_zero()) {
+    const Interval turn = 2.0 * sqrt(Interval(p.a_K) * p.c_per_K);
+    range = hull(range, p.a_K > 0.0 ? p.b + turn : p.b - turn);
+  }
+  return both(natural, range);
+}
+
 class Unifac {
  public:
   Unifac() = default;
@@ -83,11 +110,7 @@ class Unifac {
           continue;
         }
         const GroupInteraction& p = interaction_[static_cast<std::size_t>(m)][static_cast<std::size_t>(k)];
-        S exponent = p.a_K * inverse_T + p.b;
-        if (p.c_per_K != 0.0) {
-          exponent += p.c_per_K * T;
-        }
-        result.psi(m, k) = exp(-exponent);
+        result.psi(m, k) = exp(-group_exponent(p, T, inverse_T));
         if (with_slopes) {
           result.ln_slope(m, k) = p.a_K * square(inverse_T) - p.c_per_K;
         }

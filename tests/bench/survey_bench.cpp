@@ -96,16 +96,15 @@ BENCHMARK_CAPTURE(margules, n3, 3, 200)->Iterations(1)->Unit(benchmark::kMillise
 BENCHMARK_CAPTURE(margules, n5, 5, 200)->Iterations(1)->Unit(benchmark::kMillisecond);
 
 const Catalog& catalog() {
-  static const Catalog all(
-      load_parameter_folder(std::filesystem::path(STILLSHED_TEST_DATA).parent_path() / "params"));
+  static const Catalog all(load_parameter_folder(std::filesystem::path(STILLSHED_TEST_DATA).parent_path() / "params"));
   return all;
 }
 
 /// Solvents of every laboratory and plant that both group tables cover well.
 constexpr std::array<const char*, 18> kEveryday = {
-    "acetone",   "methanol",      "ethanol",    "2-propanol",      "water",      "ethyl-acetate",
-    "benzene",   "toluene",       "n-hexane",   "n-heptane",       "cyclohexane", "chloroform",
-    "2-butanone", "tetrahydrofuran", "acetonitrile", "dichloromethane", "1-butanol",  "methyl-acetate"};
+    "acetone",    "methanol",        "ethanol",      "2-propanol",      "water",       "ethyl-acetate",
+    "benzene",    "toluene",         "n-hexane",     "n-heptane",       "cyclohexane", "chloroform",
+    "2-butanone", "tetrahydrofuran", "acetonitrile", "dichloromethane", "1-butanol",   "methyl-acetate"};
 
 /// Random sets of everyday solvents without gaps in the group table.
 std::vector<Mixture> everyday(GroupModel kind, int size, int count) {
@@ -146,12 +145,8 @@ void group_model(benchmark::State& state, GroupModel kind, int size, int count) 
 }
 BENCHMARK_CAPTURE(group_model, unifac_n3, GroupModel::unifac, 3, 200)->Iterations(1)->Unit(benchmark::kMillisecond);
 BENCHMARK_CAPTURE(group_model, unifac_n4, GroupModel::unifac, 4, 100)->Iterations(1)->Unit(benchmark::kMillisecond);
-BENCHMARK_CAPTURE(group_model, dortmund_n3, GroupModel::dortmund, 3, 200)
-    ->Iterations(1)
-    ->Unit(benchmark::kMillisecond);
-BENCHMARK_CAPTURE(group_model, dortmund_n4, GroupModel::dortmund, 4, 100)
-    ->Iterations(1)
-    ->Unit(benchmark::kMillisecond);
+BENCHMARK_CAPTURE(group_model, dortmund_n3, GroupModel::dortmund, 3, 200)->Iterations(1)->Unit(benchmark::kMillisecond);
+BENCHMARK_CAPTURE(group_model, dortmund_n4, GroupModel::dortmund, 4, 100)->Iterations(1)->Unit(benchmark::kMillisecond);
 
 /// Twelve components, 4,083 faces, an azeotrope in each; faces of up to three members are proved.
 void symmetric(benchmark::State& state, int size) {

@@ -3,6 +3,9 @@
 #include <gmock/gmock.h>
 
 #include "params/load.hpp"
+#include <algorithm>
+#include <cmath>
+#include <utility>
 #include "tests/models/sample_models.hpp"
 #include "tests/support/laws.hpp"
 
@@ -87,6 +90,30 @@ TEST(Unifac, ComponentWithoutGroupsIsRefused) {
   auto mixture = samples::ethanol_benzene_water();
   mixture.groups[0].groups.clear();
   EXPECT_THROW(static_cast<void>(samples::unifac(GroupModel::unifac, mixture)), InputError);
+}
+
+TEST(Unifac, ExponentOverARangeOfTemperatureIsSharp) {
+  // Dortmund parameters whose terms run against each other, along each other, and turn inside the range.
+  const GroupInteraction cases[] = {
+      {500.0, -3.0, 4e-3}, {-300.0, 1.0, -2.5e-3}, {2777.0, -4.674, 1.551e-3}, {-200.0, 0.5, 3e-3}};
+  for (const GroupInteraction& p : cases) {
+    for (const auto& [low, high] : {std::pair(300.0, 400.0), std::pair(345.0, 346.0), std::pair(200.0, 600.0)}) {
+      const Interval T(low, high);
+      const Interval range = group_exponent(p, T, 1.0 / T);
+      double least = HUGE_VAL;
+      double most = -HUGE_VAL;
+      for (int k = 0; k <= 4000; ++k) {
+        const double t = low + (high - low) * k / 4000.0;
+        const double value = p.a_K / t + p.b + p.c_per_K * t;
+        least = std::min(least, value);
+        most = std::max(most, value);
+      }
+      EXPECT_LE(range.lower(), least);
+      EXPECT_GE(range.upper(), most);
+      EXPECT_NEAR(range.lower(), least, 1e-6);
+      EXPECT_NEAR(range.upper(), most, 1e-6);
+    }
+  }
 }
 
 }  // namespace
