@@ -2,10 +2,11 @@
 
 #include <gmock/gmock.h>
 
-#include "params/load.hpp"
 #include <algorithm>
 #include <cmath>
 #include <utility>
+
+#include "params/load.hpp"
 #include "tests/models/sample_models.hpp"
 #include "tests/support/laws.hpp"
 
