@@ -55,11 +55,11 @@ Boiling boiling_from(NodeType inside) {
 
 }  // namespace
 
-NodeType node_from_eigenvalues(const std::vector<double>& eigenvalues) {
+NodeType node_from_eigenvalues(const std::vector<double>& eigenvalues, double zero) {
   int positive = 0;
   int negative = 0;
   for (const double value : eigenvalues) {
-    if (!(std::abs(value) >= kZeroEigenvalue)) {
+    if (!(std::abs(value) >= zero)) {
       return NodeType::degenerate;
     }
     (value > 0.0 ? positive : negative) += 1;
@@ -98,7 +98,8 @@ NodeAnalysis analyse_node(const Mixture& mixture, double pressure_Pa, const Memb
       result.eigenvalues.push_back(-std::expm1(ln_k[k]));
     }
   }
-  result.node = result.complex_pair ? NodeType::degenerate : node_from_eigenvalues(result.eigenvalues);
+  const double zero = members.size() == 1 ? kZeroEigenvaluePure : kZeroEigenvalue;
+  result.node = result.complex_pair ? NodeType::degenerate : node_from_eigenvalues(result.eigenvalues, zero);
   return result;
 }
 

@@ -21,6 +21,8 @@ namespace stillshed {
 
 /// An eigenvalue smaller than this in size has no reliable sign.
 inline constexpr double kZeroEigenvalue = 1e-6;
+/// The same for a pure component: its composition is exact, so 1 - K_k is known to rounding.
+inline constexpr double kZeroEigenvaluePure = 1e-9;
 
 struct NodeAnalysis {
   NodeType node = NodeType::degenerate;   ///< in the whole mixture
@@ -37,7 +39,7 @@ struct NodeAnalysis {
 [[nodiscard]] NodeAnalysis analyse_node(const Mixture& mixture, double pressure_Pa, const Members& members,
                                         const Composition& x, double temperature_K);
 
-/// Type from real eigenvalues; `degenerate` when one of them is too close to zero or there is none.
-[[nodiscard]] NodeType node_from_eigenvalues(const std::vector<double>& eigenvalues);
+/// Type from real eigenvalues; `degenerate` when one of them is smaller than `zero` in size or there is none.
+[[nodiscard]] NodeType node_from_eigenvalues(const std::vector<double>& eigenvalues, double zero = kZeroEigenvalue);
 
 }  // namespace stillshed

@@ -93,6 +93,18 @@ TEST(NodeType, twins_and_zero_eigenvalues_are_degenerate) {
   EXPECT_EQ(node_from_eigenvalues({std::nan("")}), NodeType::degenerate);
 }
 
+TEST(NodeType, pure_component_is_typed_by_a_volatility_close_to_one) {
+  // ln alpha = A (1 - 2 x_1) + H (1/T1 - 1/T2): 1e-6 and 1e-10 at x_1 = 1.
+  const auto at_pure = [](double ln_alpha) {
+    const double boiling_2 = 1.0 / (1.0 / 350.0 - (0.5 + ln_alpha) / 4000.0);
+    const Mixture mixture = margules_mixture({350.0, boiling_2}, {{0.0, 0.5}, {0.5, 0.0}});
+    return analyse_node(mixture, kAtmosphere_Pa, {0}, {1.0, 0.0}, 350.0).node;
+  };
+  EXPECT_EQ(at_pure(1e-6), NodeType::unstable_node);
+  EXPECT_EQ(at_pure(-1e-6), NodeType::stable_node);
+  EXPECT_EQ(at_pure(1e-10), NodeType::degenerate);
+}
+
 TEST(NodeType, azeotrope_next_to_a_corner_is_typed_by_its_small_eigenvalue) {
   // ln(gamma_1/gamma_2) = A (1 - 2 x1) = H (1/T1 - 1/T2): choose T2 so that x2 = 1e-5.
   const double A = 0.9;
