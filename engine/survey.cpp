@@ -63,9 +63,10 @@ int default_proof_size(int components) {
 /// What one face contributes, in the order of `faces`.
 struct FaceWork {
   ProofResult proof;
-  std::vector<LocatedRoot> located;
   std::vector<Azeotrope> azeotropes;
   std::vector<RejectedRoot> rejected;
+  std::optional<int> index;  ///< sum of the index rule
+  std::string index_note;    ///< why there is no sum
 };
 
 class Surveyor {
@@ -100,7 +101,6 @@ class Surveyor {
       }
     }
     collect();
-    index_rules();
     conclude();
     return result_;
   }
@@ -127,7 +127,7 @@ class Surveyor {
     const Mask mask = mask_of(members);
     for (int gone = 0; gone < members.size() && members.size() > 2; ++gone) {
       const auto smaller = index_.find(mask & ~(1U << members[gone]));
-      for (const LocatedRoot& root : work_[smaller->second].located) {
+      for (const CertifiedRoot& root : work_[smaller->second].proof.roots) {
         for (const double share : {0.02, 0.3}) {
           Composition x(members.size());
           int from = 0;
@@ -149,26 +149,47 @@ class Surveyor {
       return;
     }
     const FaceSystem system(mixture_.face(members), pressure_Pa_);
+    const bool prove = members.size() <= prove_up_to_;
     LocateOptions locate;
     locate.nearby = nearby_starts(members);
     locate.seed = options_.seed;
-    const bool prove = members.size() <= prove_up_to_;
-    locate.spread = (prove ? 2 : 8) * members.size();
-    work.located = locate_roots(system, locate);
+    locate.spread = (prove ? kSpreadBeforeProof : kSpread) * members.size();
+    std::vector<LocatedRoot> located = locate_roots(system, locate);
     if (prove) {
       ProofOptions proof;
       proof.max_boxes = options_.max_boxes;
       proof.cluster_width = options_.cluster_width;
       proof.stop = options_.stop;
-      work.proof = prove_face(system, work.located, proof);
+      work.proof = prove_face(system, located, proof);
     } else {
-      for (const LocatedRoot& root : work.located) {
-        work.proof.roots.push_back({root.x, root.temperature_K, {}, false});
-      }
+      take_located(located, work);
     }
+    describe_all(k);
+    if (!prove && work.index && *work.index != index_expected(members.size())) {
+      // The rule says that something is missing, and no proof will find it.
+      locate.spread *= kMoreSpread;
+      located = locate_roots(system, locate);
+      take_located(located, work);
+      describe_all(k);
+    }
+  }
+
+  static void take_located(const std::vector<LocatedRoot>& located, FaceWork& work) {
+    work.proof.roots.clear();
+    for (const LocatedRoot& root : located) {
+      work.proof.roots.push_back({root.x, root.temperature_K, {}, false});
+    }
+  }
+
+  /// Roots of a face to azeotropes and rejected roots; then its index rule.
+  void describe_all(std::size_t k) {
+    FaceWork& work = work_[k];
+    work.azeotropes.clear();
+    work.rejected.clear();
     for (const CertifiedRoot& root : work.proof.roots) {
-      describe(members, root, work);
+      describe(faces_[k], root, work);
     }
+    evaluate_index(faces_[k], work);
   }
 
   /// Stability, node type and shape of one root.
@@ -199,6 +220,40 @@ class Surveyor {
     work.azeotropes.push_back(azeotrope);
   }
 
+  /// Index rule of a face: over the fixed points of the face and all its sub-faces, which are done before.
+  void evaluate_index(const Members& members, FaceWork& work) const {
+    work.index.reset();
+    work.index_note.clear();
+    std::vector<IndexTerm> terms;
+    for (const int i : members) {
+      terms.push_back({1, eigenvalues_inside(result_.pure[static_cast<std::size_t>(i)], members)});
+    }
+    bool splits = false;
+    bool degenerate = false;
+    const Mask mask = mask_of(members);
+    for (Mask part = mask; part != 0; part = (part - 1) & mask) {
+      const auto face = index_.find(part);
+      if (face == index_.end()) {
+        continue;  // one component
+      }
+      const FaceWork& inside = work_[face->second];
+      splits = splits || !inside.rejected.empty();
+      for (const Azeotrope& azeotrope : inside.azeotropes) {
+        terms.push_back({azeotrope.point.members.size(), eigenvalues_inside(azeotrope.point, members)});
+        degenerate = degenerate || azeotrope.cluster;
+        splits = splits || azeotrope.stability.outcome == Stability::not_concluded;
+      }
+    }
+    const std::optional<int> sum = degenerate ? std::nullopt : index_sum(terms);
+    if (splits) {
+      work.index_note = "phase-split";
+    } else if (!sum) {
+      work.index_note = "degenerate-point";
+    } else {
+      work.index = sum;
+    }
+  }
+
   void collect() {
     for (std::size_t k = 0; k < faces_.size(); ++k) {
       FaceWork& work = work_[k];
@@ -216,6 +271,13 @@ class Surveyor {
       if (work.proof.undecided.size() > kListedBoxes) {
         face.note = std::to_string(work.proof.undecided.size()) + " undecided boxes, the first " +
                     std::to_string(kListedBoxes) + " listed";
+      }
+      face.index_expected = index_expected(face.members.size());
+      face.index_sum = work.index;
+      if (work.index) {
+        face.index_holds = *work.index == face.index_expected;
+      } else if (!work.index_note.empty()) {
+        face.note += (face.note.empty() ? "" : "; ") + work.index_note;
       }
       result_.boxes += face.boxes;
       result_.faces.push_back(face);
@@ -238,41 +300,6 @@ class Surveyor {
         azeotrope.point.id += (k == 0 ? "" : ",") + mixture_.component(azeotrope.point.members[k]).id;
       }
       azeotrope.point.id += ")";
-    }
-  }
-
-  void index_rules() {
-    for (FaceProof& face : result_.faces) {
-      const Mask mask = mask_of(face.members);
-      const auto within = [&](const Members& members) { return (mask_of(members) & ~mask) == 0; };
-      face.index_expected = index_expected(face.members.size());
-      std::vector<IndexTerm> terms;
-      bool splits = false;
-      bool degenerate = false;
-      for (const RejectedRoot& root : result_.rejected) {
-        splits = splits || within(root.members);
-      }
-      for (const FixedPoint& point : result_.pure) {
-        if (within(point.members)) {
-          terms.push_back({1, eigenvalues_inside(point, face.members)});
-        }
-      }
-      for (const Azeotrope& azeotrope : result_.azeotropes) {
-        if (within(azeotrope.point.members)) {
-          terms.push_back({azeotrope.point.members.size(), eigenvalues_inside(azeotrope.point, face.members)});
-          degenerate = degenerate || azeotrope.cluster;
-          splits = splits || azeotrope.stability.outcome == Stability::not_concluded;
-        }
-      }
-      const std::optional<int> sum = degenerate ? std::nullopt : index_sum(terms);
-      if (splits) {
-        face.note = face.note.empty() ? "phase-split" : face.note + "; phase-split";
-      } else if (!sum) {
-        face.note = face.note.empty() ? "degenerate-point" : face.note + "; degenerate-point";
-      } else {
-        face.index_sum = sum;
-        face.index_holds = *sum == face.index_expected;
-      }
     }
   }
 
@@ -301,6 +328,10 @@ class Surveyor {
   }
 
   static constexpr std::size_t kListedBoxes = 100;
+  /// Spread-out starts per member: few where the proof finds what is missed, more where nothing does.
+  static constexpr int kSpreadBeforeProof = 2;
+  static constexpr int kSpread = 8;
+  static constexpr int kMoreSpread = 8;
   const Mixture& mixture_;
   double pressure_Pa_;
   const SurveyOptions& options_;

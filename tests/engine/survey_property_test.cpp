@@ -67,6 +67,23 @@ bool several_on_a_face(const std::vector<KnownRoot>& roots) {
   return false;
 }
 
+/// An accepted liquid must not lie above any other on its tangent plane: sampled over its face.
+void expect_no_split_nearby(const Mixture& mixture, const Azeotrope& azeotrope) {
+  if (azeotrope.stability.outcome != Stability::stable) {
+    return;
+  }
+  Random random(1);
+  const FixedPoint& point = azeotrope.point;
+  for (int k = 0; k < 40; ++k) {
+    const Composition part = random.composition(point.members.size());
+    Composition w(mixture.size(), 0.0);
+    for (int i = 0; i < part.size(); ++i) {
+      w[point.members[i]] = part[i];
+    }
+    EXPECT_GT(tangent_plane_distance(mixture, point.temperature_K, point.x, w), -1e-9);
+  }
+}
+
 /// The properties of one survey. `known.all`: the known roots are all there are. True when some face has several roots.
 bool check(const KnownCase& known, const std::string& what) {
   SCOPED_TRACE(what);
@@ -89,6 +106,7 @@ bool check(const KnownCase& known, const std::string& what) {
     }
   }
   for (const Azeotrope& azeotrope : result.azeotropes) {
+    expect_no_split_nearby(known.mixture, azeotrope);
     EXPECT_TRUE(azeotrope.proved);
     EXPECT_FALSE(azeotrope.cluster);
     for (int i = 0; i < azeotrope.point.x.size(); ++i) {
@@ -129,9 +147,46 @@ std::string name(const char* family, int k) {
 }
 
 TEST(SurveyProperty, closed_form_margules) {
-  for (int k = 0; k < cases(70); ++k) {
+  for (int k = 0; k < cases(50); ++k) {
     Random random(static_cast<std::uint64_t>(10'000 + k));
     check(testing::random_margules(random, k % 20 == 0 ? 5 : 3 + k % 2), name("margules", k));
+  }
+}
+
+TEST(SurveyProperty, unstable_liquids_are_marked_not_counted) {
+  int rejected = 0;
+  for (int k = 0; k < cases(20); ++k) {
+    Random random(static_cast<std::uint64_t>(15'000 + k));
+    const KnownCase known = testing::random_margules(random, 2 + k % 2, 3.5);
+    check(known, name("margules that may split", k));
+    for (const KnownRoot& root : known.roots) {
+      if (root.members.size() == 2) {
+        // A binary root inside the spinodal (1 - 2 A x_1 x_2 < 0) is certainly unstable.
+        const double A = std::get<Margules>(known.mixture.activity()).A()(root.members[0], root.members[1]);
+        rejected += 1.0 - 2.0 * A * root.x[root.members[0]] * root.x[root.members[1]] < 0.0 ? 1 : 0;
+      }
+    }
+    const Survey result = survey(known.mixture, kAtmosphere_Pa);
+    for (const Azeotrope& azeotrope : result.azeotropes) {
+      if (azeotrope.point.members.size() == 2) {
+        const Members& pair = azeotrope.point.members;
+        const double A = std::get<Margules>(known.mixture.activity()).A()(pair[0], pair[1]);
+        EXPECT_GT(1.0 - 2.0 * A * azeotrope.point.x[pair[0]] * azeotrope.point.x[pair[1]], 0.0);
+      }
+    }
+  }
+  EXPECT_GT(rejected, 3);
+}
+
+TEST(SurveyProperty, search_alone_finds_what_the_proof_finds) {
+  for (int k = 0; k < cases(16); ++k) {
+    Random random(static_cast<std::uint64_t>(25'000 + k));
+    const Mixture mixture = testing::random_nrtl(random, 4);
+    SurveyOptions located_only;
+    located_only.prove_up_to = 1;
+    EXPECT_EQ(reported(survey(mixture, kAtmosphere_Pa, located_only)).size(),
+              reported(survey(mixture, kAtmosphere_Pa)).size())
+        << k;
   }
 }
 

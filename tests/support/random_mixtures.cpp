@@ -189,13 +189,13 @@ std::vector<KnownRoot> margules_roots(const Matrix<double>& A, const std::vector
   return roots;
 }
 
-KnownCase random_margules(Random& random, int size) {
+KnownCase random_margules(Random& random, int size, double largest) {
   Matrix<double> A(size, 0.0);
   std::vector<double> boiling;
   std::vector<double> H;
   for (int i = 0; i < size; ++i) {
     for (int j = 0; j < i; ++j) {
-      A(i, j) = A(j, i) = random.uniform(-1.9, 1.9);
+      A(i, j) = A(j, i) = random.uniform(-largest, largest);
     }
     boiling.push_back(random.uniform(335.0, 365.0));
     H.push_back(random.uniform(3600.0, 5200.0));

@@ -43,8 +43,8 @@ struct KnownCase {
                                                     const std::vector<double>& boiling_points_K,
                                                     const std::vector<double>& H_K);
 
-/// |A| <= 1.9, so that no pair splits; the list of roots is complete.
-[[nodiscard]] KnownCase random_margules(Random& random, int size);
+/// |A| <= largest; no pair splits up to 2. The list of roots is complete.
+[[nodiscard]] KnownCase random_margules(Random& random, int size, double largest = 1.9);
 /// NRTL with tau = a + b/T; nothing is known about its roots.
 [[nodiscard]] Mixture random_nrtl(Random& random, int size);
 /// Binary NRTL whose boiling points are chosen so that two or three azeotropes exist; the list is complete.
