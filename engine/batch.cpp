@@ -4,6 +4,7 @@
 #include <cmath>
 #include <limits>
 
+#include "engine/cuts.hpp"
 #include "engine/flow_map.hpp"
 
 namespace stillshed {
@@ -72,6 +73,7 @@ class Walk {
         straight();
       }
     }
+    batch_.cuts = join_cuts(batch_.cuts, map_.chart().boundaries);
     return batch_;
   }
 
@@ -105,20 +107,15 @@ class Walk {
   /// The pot moves straight away from `node` to `end`, of which `left` moles remain.
   void straight_cut(int node, const Composition& end, double left, const char* on) {
     const double share = amount_ - left;
-    if (!batch_.cuts.empty() && batch_.cuts.back().fixed_point == node) {
-      batch_.cuts.back().share += share;
-      batch_.cuts.back().pot_end = end;
-    } else {
-      Cut cut;
-      cut.start = cut.end = cut.average = map_.position(node);
-      cut.fixed_point = node;
-      cut.share = share;
-      cut.t_start_K = cut.t_end_K = map_.nodes()[at(node)].temperature_K;
-      cut.pot_start = pot_;
-      cut.pot_end = end;
-      cut.on = on;
-      batch_.cuts.push_back(cut);
-    }
+    Cut cut;
+    cut.start = cut.end = cut.average = map_.position(node);
+    cut.fixed_point = node;
+    cut.share = share;
+    cut.t_start_K = cut.t_end_K = map_.nodes()[at(node)].temperature_K;
+    cut.pot_start = pot_;
+    cut.pot_end = end;
+    cut.on = on;
+    batch_.cuts.push_back(cut);
     pot_ = end;
     amount_ = left;
   }
@@ -224,16 +221,16 @@ class Walk {
       if (!arc.wall) {
         continue;
       }
-      const Foot foot = foot_on(arc.points, pot_);
+      const NearestOnCurve foot = nearest_on_curve(arc.points, pot_);
       const std::optional<FlowMap::Sides> sides = map_.sides(arc);
       if (foot.distance > kOnBoundary || !sides.has_value()) {
         continue;
       }
-      const Composition tangent = minus(arc.points[at(foot.segment + 1)], arc.points[at(foot.segment)]);
+      const Composition tangent = minus(arc.points[foot.segment + 1], arc.points[foot.segment]);
       const double turn = cross(tangent, minus(pot_, map_.position(source_)));
       const bool outward = (turn > 0.0) == (source_ == sides->right_source);
       if (outward) {
-        meet(k, foot.segment, turn);
+        meet(k, static_cast<int>(foot.segment), turn);
       }
       return;
     }

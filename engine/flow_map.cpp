@@ -2,11 +2,15 @@
 
 #include <algorithm>
 #include <cmath>
-#include <limits>
+#include <cstddef>
+
+#include "engine/position.hpp"
 
 namespace stillshed {
 
 namespace {
+
+constexpr double kOnRim = 1e-9;  ///< distance below which a composition lies on the rim of a region
 
 std::size_t at(int i) {
   return static_cast<std::size_t>(i);
@@ -14,19 +18,6 @@ std::size_t at(int i) {
 
 bool on_face(const FixedPoint& point, int i, int j) {
   return std::all_of(point.members.begin(), point.members.end(), [&](int k) { return k == i || k == j; });
-}
-
-/// Winding test; points on the rim may fall either way.
-bool inside(const std::vector<Composition>& polygon, const Composition& x) {
-  bool in = false;
-  for (std::size_t k = 0, previous = polygon.size() - 1; k < polygon.size(); previous = k++) {
-    const Composition& a = polygon[k];
-    const Composition& b = polygon[previous];
-    if ((a[1] > x[1]) != (b[1] > x[1]) && x[0] < (b[0] - a[0]) * (x[1] - a[1]) / (b[1] - a[1]) + a[0]) {
-      in = !in;
-    }
-  }
-  return in;
 }
 
 std::vector<Composition> closed(const std::vector<Composition>& polygon) {
@@ -220,7 +211,7 @@ std::vector<int> FlowMap::rim(const Region& region) const {
       const std::string& id = chart_->boundaries[at(*arc.boundary)].id;
       belongs = std::find(region.boundaries.begin(), region.boundaries.end(), id) != region.boundaries.end();
     } else {
-      belongs = foot_on(ring, between(arc.points.front(), arc.points.back(), 0.5)).distance < 1e-9;
+      belongs = nearest_on_curve(ring, between(arc.points.front(), arc.points.back(), 0.5)).distance < kOnRim;
     }
     if (belongs) {
       result.push_back(k);
@@ -232,10 +223,10 @@ std::vector<int> FlowMap::rim(const Region& region) const {
 std::optional<std::vector<Composition>> FlowMap::curve_to(const Region& region, const Composition& x) const {
   const std::vector<int> arcs = rim(region);
   int last = -1;
-  Foot foot;
+  NearestOnCurve foot;
   foot.distance = 1e-7;
   for (const int k : arcs) {
-    const Foot candidate = foot_on(arcs_[at(k)].points, x);
+    const NearestOnCurve candidate = nearest_on_curve(arcs_[at(k)].points, x);
     if (candidate.distance < foot.distance) {
       foot = candidate;
       last = k;
@@ -260,27 +251,17 @@ std::optional<std::vector<Composition>> FlowMap::curve_to(const Region& region, 
     append(path, arcs_[at(chain[k])].points);
   }
   const std::vector<Composition>& points = arcs_[at(last)].points;
-  append(path, {points.begin(), points.begin() + foot.segment + 1});
+  append(path, {points.begin(), points.begin() + static_cast<std::ptrdiff_t>(foot.segment) + 1});
   append(path, {x});
   return path;
 }
 
 std::optional<int> region_at(const Chart& chart, const Composition& x) {
-  for (int k = 0; k < static_cast<int>(chart.regions.size()); ++k) {
-    const Region& region = chart.regions[at(k)];
-    if (region.polygon.empty()) {
-      const double a = chart.fixed_points[at(region.unstable_node)].x[1];
-      const double b = chart.fixed_points[at(region.stable_node)].x[1];
-      if (x[1] >= std::min(a, b) && x[1] <= std::max(a, b)) {
-        return k;
-      }
-    } else if (inside(region.polygon, x)) {
-      return k;
-    }
+  if (const std::optional<int> region = region_of(chart, x); region.has_value()) {
+    return region;
   }
   for (int k = 0; k < static_cast<int>(chart.regions.size()); ++k) {
-    const Region& region = chart.regions[at(k)];
-    if (!region.polygon.empty() && foot_on(closed(region.polygon), x).distance < 1e-9) {
+    if (nearest_on_curve(closed(chart.regions[at(k)].polygon), x).distance < kOnRim) {
       return k;
     }
   }
@@ -310,31 +291,6 @@ std::optional<RayEnd> farthest_on_ray(const std::vector<Composition>& polygon, c
     }
     if (std::abs(side_a) > slack && std::abs(side_b) > slack && (side_a > 0.0) != (side_b > 0.0)) {
       offer(between(a, b, side_a / (side_a - side_b)));
-    }
-  }
-  return best;
-}
-
-Foot foot_on(const std::vector<Composition>& points, const Composition& x) {
-  Foot best;
-  best.distance = std::numeric_limits<double>::infinity();
-  for (std::size_t k = 0; k + 1 < points.size(); ++k) {
-    const Composition along = minus(points[k + 1], points[k]);
-    const Composition off = minus(x, points[k]);
-    double dot = 0.0;
-    double length2 = 0.0;
-    for (int i = 0; i < x.size(); ++i) {
-      dot += along[i] * off[i];
-      length2 += along[i] * along[i];
-    }
-    const double s = length2 > 0.0 ? std::clamp(dot / length2, 0.0, 1.0) : 0.0;
-    const Composition point = between(points[k], points[k + 1], s);
-    double distance2 = 0.0;
-    for (int i = 0; i < x.size(); ++i) {
-      distance2 += (x[i] - point[i]) * (x[i] - point[i]);
-    }
-    if (std::sqrt(distance2) < best.distance) {
-      best = {static_cast<int>(k), s, std::sqrt(distance2), point};
     }
   }
   return best;

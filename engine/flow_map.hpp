@@ -12,9 +12,7 @@
 /// Valid   binary and ternary mixtures.
 #pragma once
 
-#include <array>
 #include <optional>
-#include <utility>
 #include <vector>
 
 #include "engine/chart.hpp"
@@ -82,7 +80,7 @@ class FlowMap {
 [[nodiscard]] double separation(const Composition& a, const Composition& b);
 [[nodiscard]] Members present(const Composition& x);  ///< indices with x_i > 0
 
-/// Index of the region whose polygon (or interval) holds x; on a rim the first that does.
+/// Index of the region that holds x; on a rim the first that does.
 [[nodiscard]] std::optional<int> region_at(const Chart& chart, const Composition& x);
 
 /// Where the ray origin + t (through - origin) is farthest inside the closure of the polygon; empty when it meets it
@@ -93,15 +91,5 @@ struct RayEnd {
 };
 [[nodiscard]] std::optional<RayEnd> farthest_on_ray(const std::vector<Composition>& polygon, const Composition& origin,
                                                     const Composition& through);
-
-/// Closest point of a polyline: segment index, position in the segment 0..1, and the Euclidean distance over all
-/// mole fractions.
-struct Foot {
-  int segment = 0;
-  double along = 0.0;
-  double distance = 0.0;
-  Composition point;
-};
-[[nodiscard]] Foot foot_on(const std::vector<Composition>& points, const Composition& x);
 
 }  // namespace stillshed

@@ -130,7 +130,7 @@ void explain(const Question& question, const Candidate& best, ProductOutcome& ou
 
 std::string boundary_under(const Chart& chart, const Composition& x) {
   for (const Boundary& boundary : chart.boundaries) {
-    if (foot_on(boundary.curve.points, x).distance < 1e-7) {
+    if (nearest_on_curve(boundary.curve.points, x).distance < 1e-7) {
       return boundary.id;
     }
   }
@@ -286,7 +286,7 @@ double pocket_width(const Boundary& boundary) {
   const std::vector<Composition>& points = boundary.curve.points;
   double widest = 0.0;
   for (const Composition& point : points) {
-    widest = std::max(widest, foot_on({points.front(), points.back()}, point).distance);
+    widest = std::max(widest, nearest_on_curve({points.front(), points.back()}, point).distance);
   }
   return widest;
 }

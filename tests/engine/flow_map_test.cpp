@@ -2,8 +2,6 @@
 
 #include <gtest/gtest.h>
 
-#include <cmath>
-
 #include "tests/engine/hand_charts.hpp"
 
 namespace stillshed {
@@ -73,12 +71,6 @@ TEST(FlowMap, RegionsAreFoundFromTheInsideAndTheRim) {
   EXPECT_TRUE(region_at(chart, {0.4, 0.4, 0.2}).has_value());
   EXPECT_EQ(region_at(testing::binary_chart(0.3, true), {0.9, 0.1}), 0);
   EXPECT_EQ(region_at(testing::binary_chart(0.3, true), {0.1, 0.9}), 1);
-}
-
-TEST(FlowMap, FootIsTheClosestPoint) {
-  const Foot foot = foot_on({{1.0, 0.0, 0.0}, {0.0, 1.0, 0.0}}, {0.3, 0.3, 0.4});
-  EXPECT_NEAR(foot.along, 0.5, 1e-15);
-  EXPECT_NEAR(foot.distance, std::sqrt(0.04 + 0.04 + 0.16), 1e-15);
 }
 
 }  // namespace

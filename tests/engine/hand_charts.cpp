@@ -159,8 +159,10 @@ Chart binary_chart(double azeotrope_B, bool minimum) {
   add_point(chart, "az1(A,B)", {1.0 - azeotrope_B, azeotrope_B}, minimum ? 341.0 : 357.0, middle);
   add_point(chart, "A", {1.0, 0.0}, 350.0, pure);
   add_point(chart, "B", {0.0, 1.0}, 352.0, pure);
-  add_region(chart, minimum ? "az1(A,B)" : "A", minimum ? "A" : "az1(A,B)", {}, {});
-  add_region(chart, minimum ? "az1(A,B)" : "B", minimum ? "B" : "az1(A,B)", {}, {});
+  const auto p = [&](const char* id) { return place(chart, id); };
+  // The two ends, by rising x_A.
+  add_region(chart, minimum ? "az1(A,B)" : "A", minimum ? "A" : "az1(A,B)", {}, {p("az1(A,B)"), p("A")});
+  add_region(chart, minimum ? "az1(A,B)" : "B", minimum ? "B" : "az1(A,B)", {}, {p("B"), p("az1(A,B)")});
   return chart;
 }
 

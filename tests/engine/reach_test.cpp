@@ -200,6 +200,61 @@ TEST(Reach, ChargeOnABoundaryIsJudgedFromBothSides) {
   EXPECT_NEAR(study.result.products[0].recovery, study.result.products[1].recovery, 1e-6);
 }
 
+/// What the pot holds after `removed` moles of the batch left, by balance over the cuts.
+Composition pot_after(const Batch& batch, const Composition& feed, double removed) {
+  Composition moles = feed;
+  double left = removed;
+  const auto take = [&](const Composition& x, double share) {
+    const double taken = std::min(left, share);
+    for (int i = 0; i < moles.size(); ++i) {
+      moles[i] -= taken * x[i];
+    }
+    left -= taken;
+  };
+  for (const Cut& cut : batch.cuts) {
+    if (cut.drift.empty()) {
+      take(cut.average, cut.share);
+    }
+    for (const Cut::Piece& piece : cut.drift) {
+      take(piece.x, piece.share);
+    }
+  }
+  for (double& value : moles) {
+    value /= 1.0 - removed;
+  }
+  return moles;
+}
+
+TEST(Reach, SlidingPotAgreesWithSmallStepsOfTheResidueCurveRule) {
+  // A and B light with a maximum azeotrope between them, C heavy: the boundary azeotrope -> C is curved. Taking small
+  // amounts from whatever node the pot's residue curve starts in, the pot chatters across the boundary; both nodes and
+  // the saddle lie on one edge, so the average product is the drifting distillate.
+  const Mixture mixture =
+      margules_mixture({340.0, 343.0, 368.0}, {{0.0, -1.2, 0.6}, {-1.2, 0.0, -0.5}, {0.6, -0.5, 0.0}});
+  const Composition feed = {0.45, 0.20, 0.35};
+  const Study study(mixture, feed, {});
+  ASSERT_EQ(study.map.status, Status::complete) << study.map.message;
+  const Batch& batch = study.result.batch.at(0);
+  const auto drift = std::find_if(batch.cuts.begin(), batch.cuts.end(), [](const Cut& c) { return !c.drift.empty(); });
+  ASSERT_NE(drift, batch.cuts.end());
+  EXPECT_GT(separation(drift->start, drift->end), 0.02);
+  constexpr double kStep = 5e-4;
+  Composition pot = feed;
+  double amount = 1.0;
+  double worst = 0.0;
+  while (amount > 0.5) {
+    const ResidueCurve curve = residue_curve(mixture, kAtmosphere_Pa, study.map.fixed_points, pot);
+    ASSERT_TRUE(curve.from.has_value());
+    const Composition& product = study.map.fixed_points[static_cast<std::size_t>(*curve.from)].x;
+    for (int i = 0; i < pot.size(); ++i) {
+      pot[i] = (amount * pot[i] - kStep * product[i]) / (amount - kStep);
+    }
+    amount -= kStep;
+    worst = std::max(worst, separation(pot, pot_after(batch, feed, 1.0 - amount)));
+  }
+  EXPECT_LT(worst, 2e-3);  // one step moves the pot by up to 1e-3
+}
+
 /// Random Margules ternaries whose liquid does not split.
 std::vector<Study> random_studies(int count) {
   std::mt19937_64 random(20260);
