@@ -109,7 +109,10 @@ std::string tight_sentence(const Names& names, const ProductOutcome& outcome, co
   }
   if (short_of_recovery) {
     text += ", but one receiver holds no more than " + share_words(outcome.recovery, id);
-    return text + (where.empty() ? "." : ": the rest stays with " + where + ".");
+    const bool along = where.rfind("the distillation boundary", 0) == 0;
+    return text + (where.empty() ? "."
+                                 : (along ? "; most of the rest leaves along " : "; most of the rest leaves with ") +
+                                       where + ".");
   }
   text += " with little room";
   if (item != nullptr) {

@@ -91,6 +91,9 @@ TEST(Verdict, CurvedBoundaryLimitsTheRecovery) {
   EXPECT_EQ(alpha.verdict, Verdict::tight);
   EXPECT_NEAR(alpha.recovery, 0.455638, 5e-3);
   EXPECT_EQ(alpha.limited_by, "az1(mu,alpha)");
+  EXPECT_NE(alpha.sentence.find("; most of the rest leaves with the azeotrope with mu at 78.2 degC."),
+            std::string::npos)
+      << alpha.sentence;
 }
 
 TEST(Verdict, CappedNamesTheAzeotrope) {
