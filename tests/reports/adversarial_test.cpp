@@ -17,7 +17,7 @@ namespace {
 struct Check {
   const Json& problem;
   const Json& expected;
-  std::map<std::string, Run> runs;  // by task
+  std::map<std::string, RunResult> runs;  // by task
 
   explicit Check(const Json& p) : problem(p), expected(p.at("expected")) {
     for (const Json& task : p.at("tasks")) {
@@ -183,7 +183,7 @@ void check_rejected(const Check& c) {
 double stage_head(const Check& c, int stages) {
   Json problem = c.problem.at("case");
   problem["plant"]["stages"] = stages;
-  const Run run = run_case("reach", problem);
+  const RunResult run = run_case("reach", problem);
   EXPECT_FALSE(run.result.is_null()) << run.err;
   return x_of(run.result.at("stages").at("x").back(), "A");
 }
@@ -306,14 +306,14 @@ const std::map<std::string, Checker>& checkers() {
        [](const Check& c) {
          Json problem = c.problem.at("case");
          problem.erase("plant");
-         const Run run = run_case("reach", problem);
+         const RunResult run = run_case("reach", problem);
          EXPECT_EQ(run.result.at("products")[0].at("verdict"), c.expected.at("verdict_unlimited"));
        }},
       {"verdict_A_infinite_stages",
        [](const Check& c) {
          Json problem = c.problem.at("case");
          problem.erase("plant");
-         const Run run = run_case("reach", problem);
+         const RunResult run = run_case("reach", problem);
          EXPECT_EQ(run.result.at("products")[0].at("verdict"), c.expected.at("verdict_A_infinite_stages"));
        }},
       {"reasons",
@@ -461,7 +461,7 @@ TEST_P(Adversarial, MatchesTheRecord) {
       list.push_back(word);
     }
     list.erase(list.begin());
-    const Run result = run(list);
+    const RunResult result = run(list);
     EXPECT_EQ(result.exit, problem.at("expected").at("exit").get<int>());
     EXPECT_NE(result.err.find(problem.at("expected").at("message_contains").get<std::string>()), std::string::npos);
     return;

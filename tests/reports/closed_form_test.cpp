@@ -42,7 +42,7 @@ class ClosedForm : public testing::TestWithParam<Json> {};
 TEST_P(ClosedForm, SurveyMatches) {
   const Json& problem = GetParam();
   const Json& expected = problem.at("expected");
-  const Run run = run_case("survey", problem.at("case"));
+  const RunResult run = run_case("survey", problem.at("case"));
   ASSERT_FALSE(run.result.is_null()) << run.err;
   const double x_tolerance = problem.at("tolerance").at("x").get<double>();
   const double t_tolerance_K = problem.at("tolerance").at("T_K").get<double>();
@@ -110,7 +110,7 @@ void expect_every_barycentre(int n) {
     rows.push_back(row);
   }
   problem["model"] = {{"kind", "margules"}, {"A", rows}};
-  const Run run = run_case("survey", problem);
+  const RunResult run = run_case("survey", problem);
   ASSERT_FALSE(run.result.is_null()) << run.err;
   const Json& azeotropes = run.result.at("azeotropes");
   ASSERT_EQ(azeotropes.size(), (std::size_t{1} << n) - static_cast<std::size_t>(n) - 1);

@@ -21,10 +21,10 @@ std::string temporary_path(const std::string& suffix) {
   return (folder / (std::to_string(counter++) + suffix)).string();
 }
 
-Run run(const std::vector<std::string>& words) {
+RunResult run(const std::vector<std::string>& words) {
   std::ostringstream out;
   std::ostringstream err;
-  Run result;
+  RunResult result;
   result.exit = run_program(words, out, err);
   result.out = out.str();
   result.err = err.str();
@@ -35,12 +35,12 @@ Run run(const std::vector<std::string>& words) {
   return result;
 }
 
-Run run_case(const std::string& task, const Json& case_json, const std::vector<std::string>& extra) {
+RunResult run_case(const std::string& task, const Json& case_json, const std::vector<std::string>& extra) {
   const std::string path = temporary_path(".json");
   std::ofstream(path) << case_json.dump(1);
   std::vector<std::string> words = {task, path, "--json", "-"};
   words.insert(words.end(), extra.begin(), extra.end());
-  Run result = run(words);
+  RunResult result = run(words);
   std::filesystem::remove(path);
   return result;
 }

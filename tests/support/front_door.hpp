@@ -9,7 +9,7 @@ namespace stillshed::test {
 
 using Json = nlohmann::ordered_json;
 
-struct Run {
+struct RunResult {
   int exit = -1;
   std::string out;
   std::string err;
@@ -20,10 +20,10 @@ struct Run {
 [[nodiscard]] std::string temporary_path(const std::string& suffix);
 
 /// Words of a command line after the program name, e.g. {"report", "acetone=42", ...}.
-[[nodiscard]] Run run(const std::vector<std::string>& words);
+[[nodiscard]] RunResult run(const std::vector<std::string>& words);
 
 /// Writes `case_json` to a file and runs `stillshed TASK FILE --json -`.
-[[nodiscard]] Run run_case(const std::string& task, const Json& case_json, const std::vector<std::string>& extra = {});
+[[nodiscard]] RunResult run_case(const std::string& task, const Json& case_json, const std::vector<std::string>& extra = {});
 
 /// The cases of a file in tests/reference.
 [[nodiscard]] Json reference_cases(const std::string& file);
