@@ -8,12 +8,13 @@ namespace {
 
 using Point = std::pair<double, double>;
 
+/// The corner most likely to disagree (two liquids) comes first.
 const std::array<Point, 5>& box_points() {
   constexpr double low = kLowestLnGamma;
   constexpr double high = kHighestLnGamma;
   constexpr double middle = 0.5 * (low + high);
   static constexpr std::array<Point, 5> points = {
-      {{low, low}, {low, high}, {high, low}, {high, high}, {middle, middle}}};
+      {{high, high}, {low, low}, {low, high}, {high, low}, {middle, middle}}};
   return points;
 }
 

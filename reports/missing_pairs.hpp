@@ -6,6 +6,7 @@
 /// A two-constant Redlich-Kister correction on top of the filled model brings the binary (i, j) to such a point at the
 /// mean boiling temperature of the components: c0 - c1 = g_i - filled_i, c0 + c1 = g_j - filled_j.
 /// Several missing pairs: every combination, up to kMostCombinations, more are not tried.
+/// A point whose liquid splits has no verdict in this version, so most missing pairs end in NO CALL.
 /// A verdict that is the same at every point is kept, with evidence mark 0; any other is NO CALL.
 #pragma once
 

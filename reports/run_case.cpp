@@ -5,6 +5,7 @@
 #include <cmath>
 
 #include "engine/limits.hpp"
+#include "engine/split_scan.hpp"
 #include "engine/stability.hpp"
 #include "reports/build_mixture.hpp"
 #include "reports/cautions_rules.hpp"
@@ -42,6 +43,7 @@ class CaseRun {
   void describe();
   void compute();
   void compute_survey();
+  void report_splits();
   void compute_chart_and_reach();
   void bound_missing_pairs();
   void drop_what_needs_missing_pairs();
@@ -64,6 +66,7 @@ class CaseRun {
   BuiltMixture built_;
   Answer answer_;
   bool extrapolated_ = false;
+  bool splits_ = false;  ///< the boiling liquid, somewhere
 };
 
 void CaseRun::describe() {
@@ -211,19 +214,34 @@ void CaseRun::compute_survey() {
       incomplete("index rule", names(face.members), to_string(Reason::not_converged));
     }
   }
-  std::vector<Members> split_faces;
-  for (const RejectedRoot& root : answer_.survey->rejected) {
-    if (std::find(split_faces.begin(), split_faces.end(), root.members) == split_faces.end()) {
-      split_faces.push_back(root.members);
-      incomplete("azeotropes", names(root.members), to_string(Reason::phase_split_needed));
-    }
-  }
+  report_splits();
   if (answer_.survey->status == Status::stopped) {
     incomplete("survey", "", to_string(Status::stopped));
   }
   for (const std::string& note : answer_.survey->notes) {
     answer_.notes.push_back(note);
   }
+}
+
+/// Faces where a boiling liquid splits: their azeotropes of two liquids are not searched. A root whose liquid splits
+/// shows it; where there is none, the scan does.
+void CaseRun::report_splits() {
+  std::vector<Members> faces;
+  const auto add = [&](const Members& members) {
+    const bool spoiled = std::any_of(built_.choice.missing.begin(), built_.choice.missing.end(),
+                                     [&](const MissingPair& pair) { return holds_pair(members, pair); });
+    if (!spoiled && std::find(faces.begin(), faces.end(), members) == faces.end()) {
+      faces.push_back(members);
+      incomplete("azeotropes", names(members), to_string(Reason::phase_split_needed));
+    }
+  };
+  for (const RejectedRoot& root : answer_.survey->rejected) {
+    add(root.members);
+  }
+  for (const SplitWitness& witness : scan_for_splits(answer_.mixture, answer_.input.pressure_Pa)) {
+    add(witness.members);
+  }
+  splits_ = !faces.empty();
 }
 
 void CaseRun::compute_chart_and_reach() {
@@ -244,6 +262,9 @@ void CaseRun::compute_chart_and_reach() {
   ReachOptions options;
   options.stages = answer_.input.plant.stages;
   answer_.reach = reach(answer_.mixture, *answer_.survey, *answer_.chart, answer_.feed, product_specs(), options);
+  if (splits_) {
+    no_call(Reason::phase_split_needed, "the boiling liquid splits in two, and that is not computed yet");
+  }
   if (answer_.reach->status != Status::complete) {
     incomplete("reach", answer_.reach->message, to_string(answer_.reach->status));
   }
@@ -263,7 +284,7 @@ void CaseRun::bound_missing_pairs() {
   const std::vector<std::optional<Verdict>> common =
       common_verdicts(mixtures, answer_.reach->products.size(), [&](const Mixture& mixture) {
         std::vector<Verdict> verdicts(answer_.reach->products.size(), Verdict::no_call);
-        if (!options_.stop.stop_requested()) {
+        if (!options_.stop.stop_requested() && scan_for_splits(mixture, answer_.input.pressure_Pa).empty()) {
           const Reach bounded = reach_of(mixture, survey(mixture, answer_.input.pressure_Pa, survey_options()));
           for (std::size_t p = 0; p < verdicts.size() && p < bounded.products.size(); ++p) {
             verdicts[p] = bounded.products[p].verdict;

@@ -13,6 +13,9 @@ void paragraph(std::string& text, const std::string& words, int width, std::stri
   }
 }
 
+/// The mark stands before the line.
+std::string first(Evidence evidence) { return "  " + std::string(to_string(evidence)) + "  "; }
+
 }  // namespace
 
 std::string vouch_text(const Answer& answer, int width) {
@@ -24,16 +27,15 @@ std::string vouch_text(const Answer& answer, int width) {
     const auto at = static_cast<std::size_t>(i);
     const PressureSet& set = answer.mixture.component(i).pressure.set();
     paragraph(text,
-              std::string(to_string(answer.pressure_evidence[at])) + "  " + answer.mixture.component(i).id + ": " +
+              answer.mixture.component(i).id + ": " +
                   (set.source == "user" ? std::string(to_string(set.form)) + ", the user's own" : set.id) + ", " + range_text(set),
-              width, "  ", "     ");
+              width, first(answer.pressure_evidence[at]), "     ");
   }
   text += "\npairs\n";
   for (const PairUse& pair : answer.pairs) {
     paragraph(text,
-              std::string(to_string(pair.evidence)) + "  " + answer.mixture.component(pair.i).id + " + " +
-                  answer.mixture.component(pair.j).id + ": " + pair.record,
-              width, "  ", "     ");
+              answer.mixture.component(pair.i).id + " + " + answer.mixture.component(pair.j).id + ": " + pair.record,
+              width, first(pair.evidence), "     ");
   }
   text += "\nevidence: F fitted, inside its range; X stretched beyond it; P predicted from groups; U the user's own; 0 none\n";
   text += "\nsources\n";

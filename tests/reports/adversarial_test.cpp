@@ -53,11 +53,24 @@ double x_of(const Json& composition, const std::string& id) {
   return composition.contains(id) ? composition.at(id).get<double>() : 0.0;
 }
 
+/// Azeotropes of two liquids are not searched yet: a record that lists one must end incomplete, index rule open.
+bool needs_two_liquids(const Check& c) {
+  if (c.expected.contains("ternary_heteroazeotropes")) {
+    return true;
+  }
+  const Json& list = c.expected.at("azeotropes");
+  return std::any_of(list.begin(), list.end(), [](const Json& item) { return item.value("phase", "") == "heterogeneous"; });
+}
+
 void check_azeotropes(const Check& c) {
   const Json& found = c.block("azeotropes");
   ASSERT_TRUE(found.is_array());
-  EXPECT_EQ(found.size(), c.expected.at("azeotropes").size());
+  std::size_t expected = 0;
   for (const Json& wanted : c.expected.at("azeotropes")) {
+    if (wanted.value("phase", "") == "heterogeneous") {
+      continue;
+    }
+    ++expected;
     bool matched = false;
     for (const Json& candidate : with_components(found, wanted.at("components"))) {
       if (composition_difference(candidate.at("mole_fractions"), wanted.at("mole_fractions")) > c.tolerance("x", 1e-6)) {
@@ -76,6 +89,7 @@ void check_azeotropes(const Check& c) {
     }
     EXPECT_TRUE(matched) << "not found: " << wanted.dump() << " among " << found.dump();
   }
+  EXPECT_EQ(found.size(), expected);
 }
 
 void check_cuts(const Check& c) {
@@ -208,8 +222,10 @@ bool has_first_column(const Check& c, const char* split, const Json& distillate,
     double worst = column.at("split") == split ? 0.0 : 1.0;
     for (std::size_t i = 0; i < components.size(); ++i) {
       const std::string id = components[i].at("id");
-      worst = std::max(worst, std::abs(x_of(column.at("distillate"), id) - distillate[i].get<double>()));
-      worst = std::max(worst, std::abs(x_of(column.at("bottoms"), id) - bottoms[i].get<double>()));
+      const auto miss = [&](const char* stream, const Json& wanted) {
+        return std::abs(x_of(column.at(stream).at("mole_fractions"), id) - wanted[i].get<double>());
+      };
+      worst = std::max({worst, miss("distillate", distillate), miss("bottoms", bottoms)});
     }
     if (worst <= tolerance) {
       return true;
@@ -247,7 +263,13 @@ const std::map<std::string, Checker>& checkers() {
        [](const Check& c) { EXPECT_EQ(c.block("proof").at("faces").back().at("status"), c.expected.at("face_reason")); }},
       {"index_sum",
        [](const Check& c) {
-         EXPECT_EQ(c.block("proof").at("faces").back().at("index").at("sum"), c.expected.at("index_sum"));
+         const Json& sum = c.block("proof").at("faces").back().at("index").at("sum");
+         if (needs_two_liquids(c)) {
+           EXPECT_TRUE(sum.is_null());
+           EXPECT_EQ(c.runs.begin()->second.exit, 3);
+         } else {
+           EXPECT_EQ(sum, c.expected.at("index_sum"));
+         }
        }},
       {"n_ternary",
        [](const Check& c) {
@@ -488,7 +510,7 @@ std::vector<Json> adversarial_cases() {
 }
 
 INSTANTIATE_TEST_SUITE_P(Cases, Adversarial, testing::ValuesIn(adversarial_cases()),
-                         [](const auto& info) { return test_name(info.param.at("id")); });
+                         [](const auto& test_info) { return test_name(test_info.param.at("id")); });
 
 }  // namespace
 }  // namespace stillshed::test

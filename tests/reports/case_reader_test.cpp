@@ -59,7 +59,7 @@ TEST(CaseReader, AllProblemsAtOnce) {
   EXPECT_TRUE(tells(problems, "/stream/acetone", "without a unit"));
   EXPECT_TRUE(tells(problems, "/stream/warter", "nearest: water"));
   EXPECT_TRUE(tells(problems, "/pressure", "furlong"));
-  EXPECT_TRUE(tells(problems, "/model", "no nrtl records on file"));
+  EXPECT_TRUE(tells(problems, "/model", "no nrtl records are on file"));
   EXPECT_TRUE(tells(problems, "/products/acetone", "which side"));
   EXPECT_TRUE(tells(problems, "/plant/stages", "whole number"));
   EXPECT_TRUE(tells(problems, "/plant/coolant", "degC"));

@@ -89,7 +89,7 @@ std::vector<Json> closed_form_cases() {
 }
 
 INSTANTIATE_TEST_SUITE_P(Cases, ClosedForm, testing::ValuesIn(closed_form_cases()),
-                         [](const auto& info) { return test_name(info.param.at("id")); });
+                         [](const auto& test_info) { return test_name(test_info.param.at("id")); });
 
 /// n equal components with A_ij = 1.2, Tb = 350 K, H = 4000 K: one azeotrope at the barycentre of every face, with
 /// 1/T_k = 1/350 + 0.6 (k-1)/(4000 k). Derived here (closed form).
