@@ -13,6 +13,7 @@ namespace {
 
 constexpr int kMaxPieces = 400;       ///< pieces of one batch; a finite chart needs far fewer
 constexpr double kOnBoundary = 1e-9;  ///< a pot this close to a wall stands on it
+constexpr double kClearly = 1e-6;     ///< sine of the angle from which a pot clearly leaves a wall; less is rounding
 constexpr double kSameHit = 1e-10;    ///< the wall just left is not met again within this part of the ray
 
 std::size_t at(int i) {
@@ -202,8 +203,8 @@ class Walk {
     }
     const std::vector<Composition>& points = map_.arcs()[at(arc)].points;
     const Composition tangent = minus(points[at(segment + 1)], points[at(segment)]);
-    const double far_turn = cross(tangent, minus(pot_, map_.position(far)));
-    if (far_turn * turn > 0.0) {
+    const double far_angle = angle_off(tangent, far);
+    if (turn > 0.0 ? far_angle > kClearly : far_angle < -kClearly) {
       source_ = far;
       return;
     }
@@ -243,22 +244,27 @@ class Walk {
     const double amount_start = amount_;
     Cut cut;
     bool moving = true;
-    while (moving) {
+    for (std::size_t steps = 0; moving; ++steps) {
+      if (steps > 2 * arc.points.size()) {
+        give_up("the pot moves to and fro on a boundary");
+        break;
+      }
       const Composition& a = arc.points[at(sliding_segment_)];
       const Composition& b = arc.points[at(sliding_segment_ + 1)];
       const Composition tangent = minus(b, a);
-      if (cross(tangent, minus(pot_, map_.position(sides.left_source))) >= 0.0) {
+      const double left_angle = angle_off(tangent, sides.left_source);
+      const double right_angle = angle_off(tangent, sides.right_source);
+      if (left_angle > kClearly) {
         leave(sides.left_source);
         break;
       }
-      if (cross(tangent, minus(pot_, map_.position(sides.right_source))) <= 0.0) {
+      if (right_angle < -kClearly) {
         leave(sides.right_source);
         break;
       }
-      const std::optional<Composition> drawn = on_joining_curve(sides, pot_, tangent);
-      if (!drawn.has_value()) {
-        give_up("the tangent of a boundary misses the curve between its two nodes");
-        break;
+      std::optional<Composition> drawn = on_joining_curve(sides, pot_, tangent);
+      if (!drawn.has_value()) {  // the tangent passes a node by rounding
+        drawn = map_.position(left_angle > -right_angle ? sides.left_source : sides.right_source);
       }
       const Composition away = minus(pot_, *drawn);
       const bool forward = away[0] * tangent[0] + away[1] * tangent[1] > 0.0;
@@ -299,6 +305,12 @@ class Walk {
     cut.pot_end = pot_;
     cut.on = map_.chart().boundaries[at(*arc.boundary)].id;
     batch_.cuts.push_back(cut);
+  }
+
+  /// Sine of the angle between a wall and the motion away from `source`: > 0 to the left of the wall.
+  [[nodiscard]] double angle_off(const Composition& tangent, int source) const {
+    const Composition motion = minus(pot_, map_.position(source));
+    return cross(tangent, motion) / (length(tangent) * length(motion));
   }
 
   void leave(int source) {

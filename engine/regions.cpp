@@ -1,7 +1,9 @@
 #include "engine/regions.hpp"
 
 #include <algorithm>
+#include <array>
 #include <cmath>
+#include <numeric>
 #include <set>
 
 #include "engine/geometry.hpp"
@@ -9,6 +11,9 @@
 
 namespace stillshed {
 namespace {
+
+constexpr double kPi = 3.141592653589793;
+const Composition kMiddle = {1.0 / 3.0, 1.0 / 3.0, 1.0 / 3.0};
 
 struct Arc {
   int from = 0;  ///< fixed point
@@ -126,14 +131,82 @@ class Subdivision {
     return points;
   }
 
+  /// Counter-clockwise order around a node. Curves do not cross, so their first exits from any circle around the node
+  /// stand in that order; the circle that parts them best is taken. Curves that arrive along an edge of the triangle
+  /// may coincide with it to rounding: the two edge pieces come first and last, seen from the inside.
   void sort_around(std::vector<Half>& halves) const {
-    double radius = 1.0;
+    double start = -kPi;  // direction the angles are counted from
+    double shortest = 1.0;
     for (const Half& half : halves) {
-      radius = std::min(radius, 0.4 * reach_of(points_of(half)));
+      shortest = std::min(shortest, reach_of(points_of(half)));
+      if (is_first_edge(half)) {
+        start = edge_direction(half);
+      }
     }
-    std::sort(halves.begin(), halves.end(), [&](const Half& a, const Half& b) {
-      return angle_at(points_of(a), radius) < angle_at(points_of(b), radius);
-    });
+    const bool on_perimeter =
+        std::any_of(halves.begin(), halves.end(), [&](const Half& half) { return is_edge(half); });
+    std::vector<double> keys;
+    double best_gap = -1.0;
+    for (const double part : {0.9, 0.7, 0.5, 0.3, 0.15, 0.05}) {
+      const std::vector<double> candidate = keys_at(halves, start, part * shortest);
+      std::vector<double> sorted = candidate;
+      std::sort(sorted.begin(), sorted.end());
+      double gap = on_perimeter || sorted.empty() ? 2.0 * kPi : sorted.front() + 2.0 * kPi - sorted.back();
+      for (std::size_t k = 0; k + 1 < sorted.size(); ++k) {
+        gap = std::min(gap, sorted[k + 1] - sorted[k]);
+      }
+      if (gap > best_gap) {
+        best_gap = gap;
+        keys = candidate;
+      }
+    }
+    std::vector<std::size_t> order(halves.size());
+    std::iota(order.begin(), order.end(), std::size_t{0});
+    std::sort(order.begin(), order.end(), [&](std::size_t a, std::size_t b) { return keys[a] < keys[b]; });
+    std::vector<Half> result;
+    for (const std::size_t k : order) {
+      result.push_back(halves[k]);
+    }
+    halves = std::move(result);
+  }
+
+  /// Angles from `start`; edge pieces far below or above every curve.
+  [[nodiscard]] std::vector<double> keys_at(const std::vector<Half>& halves, double start, double radius) const {
+    std::vector<double> keys;
+    for (const Half& half : halves) {
+      const std::vector<Composition> points = points_of(half);
+      if (is_edge(half)) {
+        keys.push_back(is_first_edge(half) ? -4.0 * kPi : 4.0 * kPi);
+      } else {
+        const double angle = turn(start, angle_at(points, radius));
+        keys.push_back(angle < -kPi / 2.0 ? angle + 2.0 * kPi : angle);
+      }
+    }
+    return keys;
+  }
+
+  [[nodiscard]] bool is_edge(const Half& half) const { return arcs_[half.arc].boundary.empty(); }
+
+  [[nodiscard]] double edge_direction(const Half& half) const {
+    const std::vector<Composition> points = points_of(half);
+    return direction(points.front(), points.back());
+  }
+
+  /// The edge piece from which a counter-clockwise turn leads into the triangle.
+  [[nodiscard]] bool is_first_edge(const Half& half) const {
+    return is_edge(half) && turn(edge_direction(half), direction(points_of(half).front(), kMiddle)) > 0.0;
+  }
+
+  static double direction(const Composition& from, const Composition& to) {
+    const PlanePoint a = to_plane(from);
+    const PlanePoint b = to_plane(to);
+    return std::atan2(b.y - a.y, b.x - a.x);
+  }
+
+  /// From direction a to direction b, in (-pi, pi].
+  static double turn(double a, double b) {
+    const double difference = std::remainder(b - a, 2.0 * kPi);
+    return difference <= -kPi ? kPi : difference;
   }
 
   /// Having walked `half`, turn as far clockwise as possible at its end: the face stays on the left.
@@ -177,6 +250,14 @@ RegionSet find_regions(const Mixture& mixture, double pressure_Pa, const std::ve
     region.unstable_node = *inner.from;
     region.stable_node = *inner.to;
     set.regions.push_back(std::move(region));
+  }
+  double covered = 0.0;
+  for (const Region& region : set.regions) {
+    covered += region.area;
+  }
+  if (set.status == Status::complete && std::abs(covered - 1.0) > 1e-9) {
+    set.status = Status::undecided;
+    set.message = "the regions found do not cover the triangle";
   }
   return set;
 }

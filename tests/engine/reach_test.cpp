@@ -255,6 +255,39 @@ TEST(Reach, SlidingPotAgreesWithSmallStepsOfTheResidueCurveRule) {
   EXPECT_LT(worst, 2e-3);  // one step moves the pot by up to 1e-3
 }
 
+TEST(Reach, WallThatArrivesAlongAnEdgeIsFollowedToItsEnd) {
+  // The boundary into the A-B maximum azeotrope coincides with the edge A-B to rounding before it ends: the pot must
+  // not slip past the azeotrope to B, and the regions must cover the triangle.
+  const Mixture mixture = margules_mixture({341.86222453677908, 364.75895397141767, 346.25209615978093},
+                                           {{0.0, -0.929824487336123, -0.43293147432737877},
+                                            {-0.929824487336123, 0.0, 0.92164915708079853},
+                                            {-0.43293147432737877, 0.92164915708079853, 0.0}});
+  const Study study(mixture, {0.36099922196010054, 0.10297864871045898, 0.5360221293294406}, {purity(1, 0.99)});
+  const Batch& batch = study.result.batch.at(0);
+  ASSERT_FALSE(batch.cuts.empty());
+  const FixedPoint& last = study.map.fixed_points[static_cast<std::size_t>(*batch.cuts.back().fixed_point)];
+  EXPECT_EQ(last.members, (Members{0, 1}));
+  // B leaves with the first cut, the B-C azeotrope, and with the last one.
+  EXPECT_NEAR(batch.cuts.front().share * batch.cuts.front().average[1] + batch.cuts.back().share * last.x[1],
+              study.feed[1], 1e-5);
+  EXPECT_EQ(study.result.products[0].verdict, Verdict::capped);
+  EXPECT_NEAR(study.result.products[0].purity_limit_mole, 0.89495, 1e-5);
+}
+
+TEST(Reach, RegionsCoverTheTriangleWhenACurveLeavesAlongAnEdge) {
+  const Mixture mixture = margules_mixture({351.94554305663729, 340.92099224677634, 354.63699739772665},
+                                           {{0.0, -0.45716005722603847, 1.3022362928780065},
+                                            {-0.45716005722603847, 0.0, 0.45781151486447058},
+                                            {1.3022362928780065, 0.45781151486447058, 0.0}});
+  const Study study(mixture, {0.2, 0.1, 0.7}, {});
+  ASSERT_EQ(study.map.regions.size(), 4U);
+  double area = 0.0;
+  for (const Region& region : study.map.regions) {
+    area += region.area;
+  }
+  EXPECT_NEAR(area, 1.0, 1e-9);
+}
+
 /// Random Margules ternaries whose liquid does not split.
 std::vector<Study> random_studies(int count) {
   std::mt19937_64 random(20260);
