@@ -62,17 +62,16 @@ BuiltMixture build_mixture(const Case& input, const Catalog& catalog) {
   std::vector<MixtureComponent> components;
   for (std::size_t i = 0; i < built.records.size(); ++i) {
     const ComponentRecord* record = built.records[i];
-    components.push_back(record == nullptr
-                             ? *input.user_components[i]
-                             : from_record(*record, *choose_pressure_set(*record, bracket.lower_K, bracket.upper_K).set));
+    components.push_back(
+        record == nullptr ? *input.user_components[i]
+                          : from_record(*record, *choose_pressure_set(*record, bracket.lower_K, bracket.upper_K).set));
   }
   built.choice = choose_model(input, built.records, catalog.facts());
   built.mixture = Mixture(std::move(components), built.choice.activity);
   return built;
 }
 
-std::vector<Evidence> pressure_evidence(const Mixture& mixture, double pressure_Pa, double lowest_K,
-                                        double highest_K) {
+std::vector<Evidence> pressure_evidence(const Mixture& mixture, double pressure_Pa, double lowest_K, double highest_K) {
   std::vector<Evidence> marks;
   for (const MixtureComponent& component : mixture.components()) {
     const PressureSet& set = component.pressure.set();

@@ -118,8 +118,9 @@ bool Settlement::choose_basis() {
                         is_fraction(basis_) ? "wt% of the whole stream" : "kg, or wt% of the whole stream");
       }
     } else if (is_fraction(basis_) ? dimension != basis_ : is_fraction(dimension)) {
-      context_.refuse(item.pointer, std::string("a ") + to_string(dimension),
-                      std::string("the same basis for all: \"") + first->name + "\" is given as a " + to_string(basis_));
+      context_.refuse(
+          item.pointer, std::string("a ") + to_string(dimension),
+          std::string("the same basis for all: \"") + first->name + "\" is given as a " + to_string(basis_));
     }
   }
   if (rest != nullptr && (!is_fraction(basis_) || (!rest->boils && basis_ != Dimension::mass_fraction))) {
@@ -169,7 +170,8 @@ bool Settlement::fill_rest_and_judge_sum() {
     return judge_sum(sum, low, high);
   }
   if (!(sum < 1.0)) {
-    context_.refuse(rest->pointer, "nothing left: the others add up to " + shortest(100.0 * sum) + " " + percent_word(basis_),
+    context_.refuse(rest->pointer,
+                    "nothing left: the others add up to " + shortest(100.0 * sum) + " " + percent_word(basis_),
                     "less than 100 besides the rest");
     return false;
   }
@@ -182,8 +184,8 @@ bool Settlement::fill_rest_and_judge_sum() {
 }
 
 void Settlement::note_density(const CaseComponent& component, double density) {
-  std::string note = "volumes before mixing; density of " + component.entry.given_name + " " + shortest(density) +
-                     " kg/m3";
+  std::string note =
+      "volumes before mixing; density of " + component.entry.given_name + " " + shortest(density) + " kg/m3";
   if (component.record != nullptr) {
     if (component.record->liquid_density_T_K.has_value()) {
       note += " at " + shortest(*component.record->liquid_density_T_K - 273.15) + " degC";
@@ -280,7 +282,8 @@ std::vector<int> Settlement::fill(Case& result) {
       if (part.kind == NonvolatileKind::salt) {
         result.salt_mass_fraction += fraction;
         result.salts.push_back(part.given_name);
-        context_.notes.push_back(part.given_name + " is a salt: kept in the balance, its effect on volatility is not modelled");
+        context_.notes.push_back(part.given_name +
+                                 " is a salt: kept in the balance, its effect on volatility is not modelled");
       } else if (part.kind == NonvolatileKind::unknown) {
         result.unknown_mass_fraction += fraction;
         context_.notes.push_back(part.given_name + ": not identified, kept in the balance as if it did not boil");

@@ -86,9 +86,9 @@ std::optional<PressureCurve> read_pressure_curve(CaseContext& context, const std
       continue;
     }
     const bool positive = key == "boiling_point_K" || key == "H_K" || key == "Tc_K" || key == "Pc_Pa";
-    set.coefficients[k] = (positive ? read_positive(context, where, json.at(key))
-                                    : read_finite(context, where, json.at(key)))
-                              .value_or(1.0);
+    set.coefficients[k] =
+        (positive ? read_positive(context, where, json.at(key)) : read_finite(context, where, json.at(key)))
+            .value_or(1.0);
   }
   read_range(context, pointer, json, set);
   if (context.problems.size() > before) {
@@ -181,7 +181,8 @@ std::vector<CaseComponent> read_components(CaseContext& context, const OrderedJs
     }
     for (const CaseComponent& other : components) {
       if (other.entry.id == component->entry.id) {
-        context.refuse(pointer, in_quotes(component->entry.given_name) + ", the same as " + in_quotes(other.entry.given_name),
+        context.refuse(pointer,
+                       in_quotes(component->entry.given_name) + ", the same as " + in_quotes(other.entry.given_name),
                        "each component once");
       }
     }

@@ -37,8 +37,8 @@ class ModelReader {
 
 Matrix<double> ModelReader::matrix(const std::string& key, bool required, bool scalar) {
   Matrix<double> result(size(), 0.0);
-  const std::string shape = std::to_string(size()) + " rows of " + std::to_string(size()) +
-                            " numbers, in the order of \"components\"";
+  const std::string shape =
+      std::to_string(size()) + " rows of " + std::to_string(size()) + " numbers, in the order of \"components\"";
   if (!json_.contains(key)) {
     if (required) {
       context_.refuse(at(key), "nothing", shape);
@@ -63,7 +63,8 @@ Matrix<double> ModelReader::matrix(const std::string& key, bool required, bool s
     const OrderedJson& line = given[static_cast<std::size_t>(i)];
     const std::string line_pointer = pointer_join(at(key), std::to_string(i));
     if (!line.is_array() || line.size() != components_.size()) {
-      context_.refuse(line_pointer, line.is_array() ? std::to_string(line.size()) + " numbers" : brief_json(line), shape);
+      context_.refuse(line_pointer, line.is_array() ? std::to_string(line.size()) + " numbers" : brief_json(line),
+                      shape);
       continue;
     }
     for (int j = 0; j < size(); ++j) {

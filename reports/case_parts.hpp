@@ -16,7 +16,7 @@ namespace stillshed {
 
 /// Where we are reading, and everything found wrong so far.
 struct CaseContext {
-  std::string source;                         ///< file name or "command line"
+  std::string source;  ///< file name or "command line"
   const Catalog* catalog = nullptr;
   std::map<std::string, std::string> spoken;  ///< JSON pointer -> the words of a command line that it came from
   Problems problems;

@@ -38,7 +38,8 @@ bool read_test_value(CaseContext& context, const std::string& pointer, const std
   const bool purity = test.what == ProductTest::What::purity;
   const bool below_one = purity ? test.value < 1.0 : test.value <= 1.0;
   if (!(test.value > 0.0) || !below_one) {
-    context.refuse(pointer, in_quotes(text), purity ? "a purity above 0 and below 100 %" : "a share above 0, up to 100 %");
+    context.refuse(pointer, in_quotes(text),
+                   purity ? "a purity above 0 and below 100 %" : "a share above 0, up to 100 %");
     return false;
   }
   return true;
@@ -68,8 +69,7 @@ std::optional<ProductTest> read_test(CaseContext& context, const std::string& po
   }
   const bool wants_more = test.what != ProductTest::What::impurity;
   if (wants_more != test.at_least) {
-    context.refuse(pointer, in_quotes(given),
-                   wants_more ? ">= for a purity or a recovery" : "<= for an impurity", "");
+    context.refuse(pointer, in_quotes(given), wants_more ? ">= for a purity or a recovery" : "<= for an impurity", "");
     return std::nullopt;
   }
   if (!read_test_value(context, pointer, given, text.substr(at + 2), test)) {
@@ -109,7 +109,8 @@ std::vector<ProductWish> read_products(CaseContext& context, const OrderedJson& 
                                        const std::vector<CaseComponent>& components) {
   std::vector<ProductWish> wishes;
   if (!json.is_object() || json.empty()) {
-    context.refuse("/products", brief_json(json), R"(an object such as {"acetone": [">= 99.5 wt%", "water <= 0.3 wt%"]})");
+    context.refuse("/products", brief_json(json),
+                   R"(an object such as {"acetone": [">= 99.5 wt%", "water <= 0.3 wt%"]})");
     return wishes;
   }
   for (const auto& item : json.items()) {
@@ -170,8 +171,10 @@ Plant read_plant(CaseContext& context, const OrderedJson& json) {
     if (!window.is_array() || window.size() != 2 || !window[0].is_string() || !window[1].is_string()) {
       context.refuse("/plant/pressure_window", brief_json(window), R"(two pressures such as ["0.1 bar", "4 bar"])");
     } else {
-      plant.pressure_low_Pa = read_pressure_Pa(window[0].get<std::string>(), context.at("/plant/pressure_window/0"), context.problems);
-      plant.pressure_high_Pa = read_pressure_Pa(window[1].get<std::string>(), context.at("/plant/pressure_window/1"), context.problems);
+      plant.pressure_low_Pa =
+          read_pressure_Pa(window[0].get<std::string>(), context.at("/plant/pressure_window/0"), context.problems);
+      plant.pressure_high_Pa =
+          read_pressure_Pa(window[1].get<std::string>(), context.at("/plant/pressure_window/1"), context.problems);
       if (plant.pressure_low_Pa.has_value() && plant.pressure_high_Pa.has_value() &&
           !(*plant.pressure_low_Pa <= *plant.pressure_high_Pa)) {
         context.refuse("/plant/pressure_window", brief_json(window), "the lower pressure first");

@@ -123,7 +123,6 @@ void take_products(CaseContext& context, const OrderedJson& json, const std::vec
     result.products = read_products(context, json.at("products"), kept);
     return;
   }
-  context.notes.push_back("no products asked for: every component at >= 99.5 wt%");
   for (std::size_t k = 0; k < kept.size(); ++k) {
     ProductWish wish;
     wish.id = kept[k].entry.id;
@@ -145,7 +144,8 @@ std::vector<CaseComponent> keep(const std::vector<CaseComponent>& all, const std
     members.push_back(k);
   }
   if (result.user_model.has_value() && kept.size() < all.size()) {
-    result.user_model = std::visit([&](const auto& model) -> ActivityModel { return model.face(members); }, *result.user_model);
+    result.user_model =
+        std::visit([&](const auto& model) -> ActivityModel { return model.face(members); }, *result.user_model);
   }
   return components;
 }

@@ -13,7 +13,8 @@
 /// What does not boil ("residue", "solids", salts by name, "unknown") is in the balance and not in the vapour-liquid
 /// calculation; beside mole and volume percentages it is given in wt% of the whole stream. Components of amount zero
 /// are dropped, with their rows of every matrix, and a note.
-/// Without "pressure" 1 atm is taken, without "products" every component at >= 99.5 wt%; both are noted.
+/// Without "pressure" 1 atm is taken, without "products" every component at >= 99.5 wt%; the first is noted here, the
+/// second by the tasks that judge products.
 #pragma once
 
 #include <map>

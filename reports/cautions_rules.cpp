@@ -114,9 +114,8 @@ bool CautionRules::near_dry() const {
     return false;
   }
   const std::vector<Batch>& batches = answer_.reach->batch;
-  return std::any_of(batches.begin(), batches.end(), [](const Batch& batch) {
-    return !batch.cuts.empty() && batch.heel_share < kNearDry;
-  });
+  return std::any_of(batches.begin(), batches.end(),
+                     [](const Batch& batch) { return !batch.cuts.empty() && batch.heel_share < kNearDry; });
 }
 
 bool CautionRules::two_liquids() const {
@@ -191,7 +190,7 @@ std::vector<Caution> cautions_for(const Answer& answer, const std::vector<const 
 }
 
 const std::vector<std::string>& declarable_words() {
-  static const std::vector<std::string> words = {"azides",    "hydrogen-peroxide", "strong-base", "aluminium",
+  static const std::vector<std::string> words = {"azides",    "hydrogen-peroxide", "strong-base",     "aluminium",
                                                  "magnesium", "nitration",         "unknown-history", "EU",
                                                  "US",        "pharmaceutical"};
   return words;

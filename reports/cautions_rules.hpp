@@ -13,8 +13,9 @@
 namespace stillshed {
 
 /// `records`: one per component of the mixture; null for the user's own. `extrapolated`: data used outside its range.
-[[nodiscard]] std::vector<Caution> cautions_for(const Answer& answer, const std::vector<const ComponentRecord*>& records,
-                                                const Facts& facts, bool extrapolated);
+[[nodiscard]] std::vector<Caution> cautions_for(const Answer& answer,
+                                                const std::vector<const ComponentRecord*>& records, const Facts& facts,
+                                                bool extrapolated);
 
 /// Words that a case may declare, with what they mean: "azides", "hydrogen-peroxide", ...
 [[nodiscard]] const std::vector<std::string>& declarable_words();

@@ -5,6 +5,7 @@
 
 #include "reports/case_reader.hpp"
 #include "reports/format.hpp"
+#include "reports/json_write.hpp"
 #include "reports/run_case.hpp"
 
 namespace stillshed {
@@ -92,10 +93,9 @@ void boiling_point_line(const CheckValue& check, const Catalog& catalog, std::ve
 void fenske_line(const CheckValue& check, std::vector<CheckLine>& lines) {
   const double ratio = check.purity / (1.0 - check.purity);
   const double stages = 2.0 * std::log(ratio) / std::log(check.relative_volatility);
-  lines.push_back(line_for(check,
-                           "stages, alpha " + significant(check.relative_volatility, 4) + ", purity " +
-                               significant(check.purity, 4),
-                           stages, check.expected.front()));
+  lines.push_back(line_for(
+      check, "stages, alpha " + significant(check.relative_volatility, 4) + ", purity " + significant(check.purity, 4),
+      stages, check.expected.front()));
 }
 
 /// The survey of a case must find exactly the azeotropes listed, in any order.
@@ -153,13 +153,35 @@ CheckAnswer run_checks(const Catalog& catalog) {
     try {
       add_lines(check, catalog, answer.lines);
     } catch (const InputError& error) {
-      answer.lines.push_back({check.id, "could not be computed: " + std::string(error.what()), "-", "-", check.source, false});
+      answer.lines.push_back(
+          {check.id, "could not be computed: " + std::string(error.what()), "-", "-", check.source, false});
     }
   }
   for (CheckLine& line : answer.lines) {
     line.source = catalog.citation(line.source);
   }
   return answer;
+}
+
+std::string check_json(const CheckAnswer& answer) {
+  JsonWriter json;
+  json.open_object();
+  json.member("stillshed_check", 1);
+  json.member("mismatches", answer.mismatches());
+  json.open_array("values");
+  for (const CheckLine& line : answer.lines) {
+    json.open_object(JsonWriter::Layout::inline_);
+    json.member("id", line.id);
+    json.member("what", line.what);
+    json.member("computed", line.computed);
+    json.member("published", line.published);
+    json.member("source", line.source);
+    json.member("agrees", line.agrees);
+    json.close();
+  }
+  json.close();
+  json.close();
+  return json.finish();
 }
 
 std::string check_text(const CheckAnswer& answer, int width) {
@@ -190,9 +212,10 @@ std::string check_text(const CheckAnswer& answer, int width) {
     }
   }
   const int mismatches = answer.mismatches();
-  text += "\n" + std::to_string(answer.lines.size()) + " values, " +
-          (mismatches == 0 ? "all agree" : std::to_string(mismatches) + (mismatches == 1 ? " mismatch" : " mismatches")) +
-          "\n";
+  text +=
+      "\n" + std::to_string(answer.lines.size()) + " values, " +
+      (mismatches == 0 ? "all agree" : std::to_string(mismatches) + (mismatches == 1 ? " mismatch" : " mismatches")) +
+      "\n";
   return text;
 }
 

@@ -121,22 +121,35 @@ int run_on_case(const Command& command, const Catalog& catalog, std::ostream& ou
   return answer.exit_code;
 }
 
+/// Text for people unless the JSON goes to the same place.
+void write_both(const Command& command, const std::string& text, const std::string& json, std::ostream& out) {
+  if (command.json == "-") {
+    out << json;
+    return;
+  }
+  if (!command.json.empty()) {
+    write_file(command.json, json);
+  }
+  if (!command.quiet) {
+    out << text;
+  }
+}
+
 int run_name(const Command& command, const Catalog& catalog, std::ostream& out) {
   const NameAnswer answer = name_text(command.words, catalog);
-  if (!command.quiet) {
-    out << answer.text;
-  }
   if (!answer.problems.empty()) {
+    if (command.json.empty() && !command.quiet) {
+      out << answer.text;  // what was found may be what was wanted
+    }
     throw InputError(answer.problems);
   }
+  write_both(command, answer.text, answer.json, out);
   return 0;
 }
 
 int run_check(const Command& command, const Catalog& catalog, std::ostream& out) {
   const CheckAnswer answer = run_checks(catalog);
-  if (!command.quiet) {
-    out << check_text(answer, terminal_options(out).width);
-  }
+  write_both(command, check_text(answer, terminal_options(out).width), check_json(answer), out);
   return answer.mismatches() == 0 ? 0 : kMismatch;
 }
 
@@ -161,7 +174,8 @@ int run_program(const std::vector<std::string>& words, std::ostream& out, std::o
     return run_command(words, out, err);
   } catch (const InputError& error) {
     const std::size_t count = error.problems().size();
-    err << "stillshed: " << (count == 1 ? "a problem" : std::to_string(count) + " problems") << " with the input, nothing computed\n";
+    err << "stillshed: " << (count == 1 ? "a problem" : std::to_string(count) + " problems")
+        << " with the input, nothing computed\n";
     for (const Problem& problem : error.problems()) {
       err << "  " << problem.text() << '\n';
     }

@@ -26,15 +26,16 @@ constexpr TaskWords kTasks[] = {
      "stillshed chart acetone=30 chloroform=30 methanol=40 --basis mol%"},
     {Task::reach, "reach", "what each product can reach, and what stops it (two and three components)",
      "stillshed reach ethanol=40 water=60 --basis wt% --product \"ethanol >= 90 wt%\" --stages 20"},
-    {Task::vouch, "vouch", "source, range and evidence of every parameter in use",
-     "stillshed vouch tank_T4.json"},
+    {Task::vouch, "vouch", "source, range and evidence of every parameter in use", "stillshed vouch tank_T4.json"},
     {Task::name, "name", "what a substance name or CAS number means here",
      "stillshed name MEK 67-63-0 \"ethyl acetate\""},
     {Task::check, "check", "recomputes published check values on this installation", "stillshed check"},
 };
 
 /// CLI11's messages without its class names; our problems say where, what is allowed, what to do.
-Problem problem_of(const CLI::ParseError& error) { return {"command line", error.what(), "", "see --help"}; }
+Problem problem_of(const CLI::ParseError& error) {
+  return {"command line", error.what(), "", "see --help"};
+}
 
 void add_case_options(CLI::App& app, Command& command) {
   app.add_option("case", command.words,
@@ -44,21 +45,24 @@ void add_case_options(CLI::App& app, Command& command) {
   app.add_option("--pressure", command.form.pressure, "such as 1atm, \"150 mbar\", 2barg (default 1 atm)");
   app.add_option("--amount", command.form.amount, "of the whole stream, such as \"4200 kg\"");
   app.add_option("--model", command.form.model, "auto, unifac-dortmund, unifac, ideal (default auto)");
-  app.add_option("--product", command.form.products,
-                 "wanted product with a test, such as \"acetone >= 99.5 wt%\" or \"acetone: water <= 0.3 wt%\"; repeatable")
+  app.add_option(
+         "--product", command.form.products,
+         "wanted product with a test, such as \"acetone >= 99.5 wt%\" or \"acetone: water <= 0.3 wt%\"; repeatable")
       ->type_name("TEXT")
       ->allow_extra_args(false);
   app.add_option("--stages", command.form.stages, "theoretical stages, the pot included")->type_name("N");
   app.add_option("--title", command.form.title, "printed on top");
-  app.add_option("--declare", command.declared,
-                 "history, region or use that brings up cautions: azides, hydrogen-peroxide, strong-base, ...; repeatable")
+  app.add_option(
+         "--declare", command.declared,
+         "history, region or use that brings up cautions: azides, hydrogen-peroxide, strong-base, ...; repeatable")
       ->type_name("WORD")
       ->allow_extra_args(false);
   app.add_option("--seed", command.seed, "of every random choice (default 1)")->type_name("N");
 }
 
 void add_output_options(CLI::App& app, Command& command) {
-  app.add_option("--json", command.json, "writes the result for machines; - for standard output, then nothing else goes there")
+  app.add_option("--json", command.json,
+                 "writes the result for machines; - for standard output, then nothing else goes there")
       ->type_name("FILE|-");
   app.add_flag("--quiet", command.quiet, "prints nothing for people");
 }

@@ -23,9 +23,13 @@ InterruptGuard::InterruptGuard() {
   sigaction(SIGINT, &action, &former_);
 }
 
-InterruptGuard::~InterruptGuard() { sigaction(SIGINT, &former_, nullptr); }
+InterruptGuard::~InterruptGuard() {
+  sigaction(SIGINT, &former_, nullptr);
+}
 
-bool InterruptGuard::interrupted() const { return signals_seen != 0; }
+bool InterruptGuard::interrupted() const {
+  return signals_seen != 0;
+}
 
 bool InterruptGuard::poll() {
   if (interrupted()) {

@@ -9,7 +9,9 @@ namespace {
 
 constexpr double kSamePressure = 0.05;
 
-bool same_pressure(double a_Pa, double b_Pa) { return std::abs(a_Pa / b_Pa - 1.0) <= kSamePressure; }
+bool same_pressure(double a_Pa, double b_Pa) {
+  return std::abs(a_Pa / b_Pa - 1.0) <= kSamePressure;
+}
 
 /// The record in the order of the mixture; nothing when it has other components.
 std::optional<MeasuredMatch> in_mixture(const MeasuredAzeotrope& record, const Mixture& mixture) {
@@ -123,9 +125,9 @@ void match_measurements(const Facts& facts, Answer& answer) {
     while (last < alone.size() && alone[last].members == alone[first].members) {
       ++last;
     }
-    for (MeasuredMatch& match : nearest_pressure({alone.begin() + static_cast<std::ptrdiff_t>(first),
-                                                  alone.begin() + static_cast<std::ptrdiff_t>(last)},
-                                                 pressure_Pa)) {
+    for (MeasuredMatch& match : nearest_pressure(
+             {alone.begin() + static_cast<std::ptrdiff_t>(first), alone.begin() + static_cast<std::ptrdiff_t>(last)},
+             pressure_Pa)) {
       answer.measured_only.push_back(std::move(match));
     }
     first = last;

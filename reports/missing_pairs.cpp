@@ -1,5 +1,6 @@
 #include "reports/missing_pairs.hpp"
 
+#include <algorithm>
 #include <array>
 #include <utility>
 
@@ -27,7 +28,8 @@ double mean_boiling_point_K(const Mixture& mixture, double pressure_Pa) {
 }
 
 /// Correction that brings the pair to this point.
-RedlichKisterPair correction(const Mixture& filled, const MissingPair& pair, double temperature_K, const Point& target) {
+RedlichKisterPair correction(const Mixture& filled, const MissingPair& pair, double temperature_K,
+                             const Point& target) {
   Members members;
   members.push_back(pair.i);
   members.push_back(pair.j);
@@ -64,9 +66,50 @@ std::vector<Mixture> bounding_mixtures(const Mixture& filled, const std::vector<
   return mixtures;
 }
 
-std::vector<std::optional<Verdict>> common_verdicts(
-    const std::vector<Mixture>& mixtures, std::size_t products,
-    const std::function<std::vector<Verdict>(const Mixture&)>& judge) {
+bool holds_missing_pair(const Members& members, const std::vector<MissingPair>& missing) {
+  const auto has = [&](int i) { return std::find(members.begin(), members.end(), i) != members.end(); };
+  return std::any_of(missing.begin(), missing.end(),
+                     [&](const MissingPair& pair) { return has(pair.i) && has(pair.j); });
+}
+
+void forget_missing_pairs(Survey& survey, const std::vector<MissingPair>& missing) {
+  const auto erase_spoiled = [&](auto& list, auto&& members_of) {
+    list.erase(std::remove_if(list.begin(), list.end(),
+                              [&](const auto& item) { return holds_missing_pair(members_of(item), missing); }),
+               list.end());
+  };
+  erase_spoiled(survey.azeotropes, [](const Azeotrope& item) { return item.point.members; });
+  erase_spoiled(survey.rejected, [](const RejectedRoot& item) { return item.members; });
+  for (FaceProof& face : survey.faces) {
+    if (holds_missing_pair(face.members, missing)) {
+      const Members members = face.members;
+      face = FaceProof{};
+      face.members = members;
+      face.note = to_string(Reason::missing_pair);
+    }
+  }
+  // An absent component's K at a point hangs on its pairs with the components that are there.
+  const auto forget_node = [&](FixedPoint& point) {
+    const auto has = [&](int i) {
+      return std::find(point.members.begin(), point.members.end(), i) != point.members.end();
+    };
+    for (const MissingPair& pair : missing) {
+      if (has(pair.i) != has(pair.j)) {
+        point.node = NodeType::degenerate;
+        point.eigenvalues.clear();
+      }
+    }
+  };
+  std::for_each(survey.pure.begin(), survey.pure.end(), forget_node);
+  for (Azeotrope& azeotrope : survey.azeotropes) {
+    forget_node(azeotrope.point);
+  }
+  survey.index_rule_holds.reset();
+  survey.status = survey.status == Status::complete ? Status::undecided : survey.status;
+}
+
+std::vector<std::optional<Verdict>> common_verdicts(const std::vector<Mixture>& mixtures, std::size_t products,
+                                                    const std::function<std::vector<Verdict>(const Mixture&)>& judge) {
   std::vector<std::optional<Verdict>> common(products);
   for (std::size_t m = 0; m < mixtures.size(); ++m) {
     const std::vector<Verdict> verdicts = judge(mixtures[m]);

@@ -26,6 +26,13 @@ inline constexpr std::size_t kMostCombinations = 25;  ///< two missing pairs
 [[nodiscard]] std::vector<Mixture> bounding_mixtures(const Mixture& filled, const std::vector<MissingPair>& missing,
                                                      double pressure_Pa);
 
+/// True when these members include both ends of a missing pair.
+[[nodiscard]] bool holds_missing_pair(const Members& members, const std::vector<MissingPair>& missing);
+
+/// Takes out of the survey of a filled mixture what its missing pairs decide: faces that hold one are not run, nodes
+/// whose type hangs on one are degenerate, the index rule of the mixture is open, a complete survey undecided.
+void forget_missing_pairs(Survey& survey, const std::vector<MissingPair>& missing);
+
 /// The same verdicts in every reach that a mixture can have: per product the common verdict, or nothing.
 /// `judge` gives the verdicts of one mixture, in the order of the products.
 [[nodiscard]] std::vector<std::optional<Verdict>> common_verdicts(

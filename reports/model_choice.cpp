@@ -181,8 +181,9 @@ ModelChoice choose_table(const std::vector<const ComponentRecord*>& records, con
   const bool second = original.usable() && (!dortmund.usable() || original.missing() < dortmund.missing());
   const Coverage& best = second ? original : dortmund;
   return best.choice("auto: no table covers every pair; " + best.title() +
-                     (best.usable() ? " lacks " + std::to_string(best.missing()) + (best.missing() == 1 ? " pair" : " pairs")
-                                    : " has no groups for " + best.without_groups()));
+                     (best.usable()
+                          ? " lacks " + std::to_string(best.missing()) + (best.missing() == 1 ? " pair" : " pairs")
+                          : " has no groups for " + best.without_groups()));
 }
 
 }  // namespace

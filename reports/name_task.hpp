@@ -11,6 +11,7 @@ namespace stillshed {
 
 struct NameAnswer {
   std::string text;               ///< for people, of every name that was found
+  std::string json;               ///< the same for machines: reports/schema/name.schema.json
   std::vector<Problem> problems;  ///< one for every name that was not
 };
 

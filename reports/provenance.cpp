@@ -49,9 +49,9 @@ void component_lines(const std::vector<const ComponentRecord*>& records, const C
     if (record == nullptr) {
       continue;
     }
-    for (const auto& [what, value] : {std::pair("critical pressure", &record->critical_pressure_Pa),
-                                      std::pair("melting point", &record->melting_point_K),
-                                      std::pair("flash point", &record->flash_point_K)}) {
+    for (const auto& [what, value] :
+         {std::pair("critical pressure", &record->critical_pressure_Pa),
+          std::pair("melting point", &record->melting_point_K), std::pair("flash point", &record->flash_point_K)}) {
       if (value->has_value()) {
         lines.push_back(std::string(what) + " of " + record->id + ": " + catalog.citation((*value)->source));
       }

@@ -15,15 +15,15 @@ std::string with_basis(const std::string& amount, const std::string& basis, bool
     return amount;
   }
   const UnitWord* unit = find_unit(basis);
-  const bool by_count = unit != nullptr && (unit->dimension == Dimension::mole_fraction ||
-                                            unit->dimension == Dimension::volume_fraction);
+  const bool by_count =
+      unit != nullptr && (unit->dimension == Dimension::mole_fraction || unit->dimension == Dimension::volume_fraction);
   return amount + " " + (residue && by_count ? "wt%" : basis);
 }
 
 void write_stream(const QuickForm& form, OrderedJson& json, SpokenWords& spoken, Problems& problems) {
   const UnitWord* unit = find_unit(form.basis);
-  if (!form.basis.empty() && (unit == nullptr || unit->dimension == Dimension::pressure ||
-                              unit->dimension == Dimension::temperature)) {
+  if (!form.basis.empty() &&
+      (unit == nullptr || unit->dimension == Dimension::pressure || unit->dimension == Dimension::temperature)) {
     const std::string why = why_refused(form.basis);
     problems.push_back({std::string(kSource) + "--basis", in_quotes(form.basis) + (why.empty() ? "" : " (" + why + ")"),
                         "wt%, mol%, vol%, kg, mol, L", ""});
@@ -35,7 +35,8 @@ void write_stream(const QuickForm& form, OrderedJson& json, SpokenWords& spoken,
     const std::string name = plain_text(word.substr(0, sign));
     const std::string amount = plain_text(word.substr(sign + 1));
     if (name.empty() || amount.empty()) {
-      problems.push_back({kSource + word, name.empty() ? "no name" : "no amount", "NAME=AMOUNT, such as acetone=42", ""});
+      problems.push_back(
+          {kSource + word, name.empty() ? "no name" : "no amount", "NAME=AMOUNT, such as acetone=42", ""});
       continue;
     }
     if (stream.contains(name)) {
@@ -65,8 +66,8 @@ void write_product(const std::string& words, OrderedJson& products, SpokenWords&
   }
   name = plain_text(name);
   if (name.empty()) {
-    problems.push_back({std::string(kSource) + "--product", in_quotes(words), "\"acetone >= 99.5 wt%\"",
-                        "say which product"});
+    problems.push_back(
+        {std::string(kSource) + "--product", in_quotes(words), "\"acetone >= 99.5 wt%\"", "say which product"});
     return;
   }
   OrderedJson& list = products[name];
@@ -81,7 +82,9 @@ void write_product(const std::string& words, OrderedJson& products, SpokenWords&
 
 }  // namespace
 
-bool is_stream_word(const std::string& word) { return word.find('=') != std::string::npos; }
+bool is_stream_word(const std::string& word) {
+  return word.find('=') != std::string::npos;
+}
 
 void write_quick_form(const QuickForm& form, OrderedJson& json, SpokenWords& spoken, Problems& problems) {
   if (!json.contains("stillshed_case") && json.empty()) {

@@ -10,6 +10,7 @@
 #include "reports/build_mixture.hpp"
 #include "reports/cautions_rules.hpp"
 #include "reports/findings.hpp"
+#include "reports/format.hpp"
 #include "reports/measured_match.hpp"
 #include "reports/missing_pairs.hpp"
 #include "reports/provenance.hpp"
@@ -21,12 +22,16 @@
 namespace stillshed {
 namespace {
 
-bool wants_chart(Task task) { return task == Task::report || task == Task::chart || task == Task::reach; }
-bool wants_reach(Task task) { return task == Task::report || task == Task::reach; }
+bool wants_chart(Task task) {
+  return task == Task::report || task == Task::chart || task == Task::reach;
+}
+bool wants_reach(Task task) {
+  return task == Task::report || task == Task::reach;
+}
 
-bool holds_pair(const Members& members, const MissingPair& pair) {
-  const auto has = [&](int i) { return std::find(members.begin(), members.end(), i) != members.end(); };
-  return has(pair.i) && has(pair.j);
+std::string range_words(const GroupTable& table) {
+  const auto bound = [](const std::optional<double>& value) { return value.has_value() ? fixed(*value, 0) : "any"; };
+  return bound(table.recommended_low_K) + " to " + bound(table.recommended_high_K) + " K";
 }
 
 /// One case on its way through the engine.
@@ -46,8 +51,8 @@ class CaseRun {
   void report_splits();
   void compute_chart_and_reach();
   void bound_missing_pairs();
-  void drop_what_needs_missing_pairs();
   void judge_limits();
+  void judge_group_table(const TemperatureRange& used);
   void finish();
 
   [[nodiscard]] SurveyOptions survey_options() const;
@@ -83,11 +88,16 @@ void CaseRun::describe() {
   for (const StreamEntry& entry : answer_.input.stream) {
     answer_.feed.push_back(entry.mole_fraction);
   }
+  const std::vector<ProductWish>& wishes = answer_.input.products;
+  if (wants_reach(answer_.task) &&
+      std::any_of(wishes.begin(), wishes.end(), [](const ProductWish& wish) { return wish.default_tests; })) {
+    answer_.notes.push_back("where no purity is asked for, >= 99.5 wt% is taken");
+  }
   for (const MissingPair& pair : built_.choice.missing) {
-    incomplete("activity model",
-               answer_.mixture.component(pair.i).id + " + " + answer_.mixture.component(pair.j).id + ", groups " +
-                   pair.groups,
-               to_string(Reason::missing_pair));
+    incomplete(
+        "activity model",
+        answer_.mixture.component(pair.i).id + " + " + answer_.mixture.component(pair.j).id + ", groups " + pair.groups,
+        to_string(Reason::missing_pair));
   }
   if (!built_.choice.refusal.empty()) {
     incomplete("activity model", built_.choice.refusal, to_string(Reason::missing_pair));
@@ -160,53 +170,14 @@ void CaseRun::no_call(Reason reason, const std::string& sentence) {
   }
 }
 
-/// Faces that hold a missing pair are not known, nor are node types that its infinite dilution decides.
-void CaseRun::drop_what_needs_missing_pairs() {
-  Survey& survey = *answer_.survey;
-  const auto spoiled = [&](const Members& members) {
-    return std::any_of(built_.choice.missing.begin(), built_.choice.missing.end(),
-                       [&](const MissingPair& pair) { return holds_pair(members, pair); });
-  };
-  const auto erase_spoiled = [&](auto& list, auto&& members_of) {
-    list.erase(std::remove_if(list.begin(), list.end(), [&](const auto& item) { return spoiled(members_of(item)); }),
-               list.end());
-  };
-  erase_spoiled(survey.azeotropes, [](const Azeotrope& item) { return item.point.members; });
-  erase_spoiled(survey.rejected, [](const RejectedRoot& item) { return item.members; });
-  for (FaceProof& face : survey.faces) {
-    if (spoiled(face.members)) {
-      const Members members = face.members;
-      face = FaceProof{};
-      face.members = members;
-      face.note = to_string(Reason::missing_pair);
-    }
-  }
-  const auto forget_node = [&](FixedPoint& point) {
-    for (const MissingPair& pair : built_.choice.missing) {
-      const auto has = [&](int i) { return std::find(point.members.begin(), point.members.end(), i) != point.members.end(); };
-      if (has(pair.i) != has(pair.j)) {
-        point.node = NodeType::degenerate;
-        point.eigenvalues.clear();
-      }
-    }
-  };
-  std::for_each(survey.pure.begin(), survey.pure.end(), forget_node);
-  for (Azeotrope& azeotrope : survey.azeotropes) {
-    forget_node(azeotrope.point);
-  }
-  survey.index_rule_holds.reset();
-  survey.status = survey.status == Status::complete ? Status::undecided : survey.status;
-  answer_.notes.push_back("nodes that depend on a missing pair are printed as degenerate: their type is not known");
-}
-
 void CaseRun::compute_survey() {
   answer_.survey = survey(answer_.mixture, answer_.input.pressure_Pa, survey_options());
   if (!built_.choice.missing.empty()) {
-    drop_what_needs_missing_pairs();
+    forget_missing_pairs(*answer_.survey, built_.choice.missing);
+    answer_.notes.push_back("nodes that depend on a missing pair are printed as degenerate: their type is not known");
   }
   for (const FaceProof& face : answer_.survey->faces) {
-    const bool spoiled = face.note == to_string(Reason::missing_pair);
-    if (spoiled) {
+    if (holds_missing_pair(face.members, built_.choice.missing)) {
       incomplete("azeotropes", names(face.members), to_string(Reason::missing_pair));
     } else if (face.status != Status::complete && face.status != Status::not_run) {
       incomplete("proof", names(face.members), to_string(face.status));
@@ -228,9 +199,8 @@ void CaseRun::compute_survey() {
 void CaseRun::report_splits() {
   std::vector<Members> faces;
   const auto add = [&](const Members& members) {
-    const bool spoiled = std::any_of(built_.choice.missing.begin(), built_.choice.missing.end(),
-                                     [&](const MissingPair& pair) { return holds_pair(members, pair); });
-    if (!spoiled && std::find(faces.begin(), faces.end(), members) == faces.end()) {
+    if (!holds_missing_pair(members, built_.choice.missing) &&
+        std::find(faces.begin(), faces.end(), members) == faces.end()) {
       faces.push_back(members);
       incomplete("azeotropes", names(members), to_string(Reason::phase_split_needed));
     }
@@ -336,7 +306,8 @@ void CaseRun::compute() {
   }
   const std::string too_many = "maps and reach for four and more components are not drawn by this version";
   if (answer_.mixture.size() > kMapUpTo) {
-    incomplete("chart and reach", std::to_string(answer_.mixture.size()) + " components", to_string(Status::not_applicable));
+    incomplete("chart and reach", std::to_string(answer_.mixture.size()) + " components",
+               to_string(Status::not_applicable));
     answer_.notes.push_back(too_many);
     if (wants_reach(answer_.task)) {
       start_empty_reach(too_many);
@@ -350,10 +321,24 @@ void CaseRun::compute() {
   }
 }
 
+/// Group tables are recommended for a range of temperatures; beyond it the prediction is stretched, and said so.
+void CaseRun::judge_group_table(const TemperatureRange& used) {
+  const Facts& facts = catalog_.facts();
+  for (const GroupTable* table : {&facts.unifac, &facts.dortmund}) {
+    const bool in_use = answer_.model_kind == to_string(table->model);
+    if (in_use && (used.lower_K < table->recommended_low_K.value_or(0.0) ||
+                   used.upper_K > table->recommended_high_K.value_or(used.upper_K))) {
+      extrapolated_ = true;
+      answer_.notes.push_back(table->title + " is recommended for " + range_words(*table) + "; this run uses " +
+                              fixed(used.lower_K, 0) + " to " + fixed(used.upper_K, 0) + " K");
+    }
+  }
+}
+
 void CaseRun::judge_limits() {
   const TemperatureRange used = temperatures_used();
-  answer_.pressure_evidence =
-      pressure_evidence(answer_.mixture, answer_.input.pressure_Pa, used.lower_K, used.upper_K);
+  judge_group_table(used);
+  answer_.pressure_evidence = pressure_evidence(answer_.mixture, answer_.input.pressure_Pa, used.lower_K, used.upper_K);
   for (const LimitNote& note : check_limits(answer_.mixture, answer_.input.pressure_Pa, answer_.feed, used)) {
     answer_.notes.push_back(note.text);
     extrapolated_ = extrapolated_ || note.severity == Severity::stretched;
@@ -387,7 +372,8 @@ void CaseRun::finish() {
     for (const ProductOutcome& product : answer_.reach->products) {
       answer_.product_evidence.push_back(weakest);
       if (product.verdict == Verdict::no_call) {
-        const std::string why = product.reasons.empty() ? to_string(answer_.reach->status) : to_string(product.reasons.front());
+        const std::string why =
+            product.reasons.empty() ? to_string(answer_.reach->status) : to_string(product.reasons.front());
         incomplete("verdict", answer_.mixture.component(product.component).id, why);
       }
     }

@@ -97,7 +97,8 @@ OrderedJson parse_strict_json(std::string_view text, const std::string& source) 
     throw InputError(Problem{source + ": line " + std::to_string(at.line) + ", column " + std::to_string(at.column),
                              "malformed JSON (" + reason(error.what()) + ")", "one JSON document", ""});
   } catch (const OrderedJson::exception& error) {
-    throw InputError(Problem{source, std::string("a number out of range (") + error.what() + ")", "finite numbers", ""});
+    throw InputError(
+        Problem{source, std::string("a number out of range (") + error.what() + ")", "finite numbers", ""});
   }
   if (!repeated.problems().empty()) {
     throw InputError(repeated.problems());

@@ -165,7 +165,9 @@ const char* to_string(Dimension dimension) {
   return "";
 }
 
-std::span<const UnitWord> unit_table() { return kTable; }
+std::span<const UnitWord> unit_table() {
+  return kTable;
+}
 
 const UnitWord* find_unit(std::string_view word) {
   const std::string exact = without_blanks(word);

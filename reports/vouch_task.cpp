@@ -14,21 +14,25 @@ void paragraph(std::string& text, const std::string& words, int width, std::stri
 }
 
 /// The mark stands before the line.
-std::string first(Evidence evidence) { return "  " + std::string(to_string(evidence)) + "  "; }
+std::string first(Evidence evidence) {
+  return "  " + std::string(to_string(evidence)) + "  ";
+}
 
 }  // namespace
 
 std::string vouch_text(const Answer& answer, int width) {
   std::string text;
-  paragraph(text, "model " + answer.model_kind + " (" + answer.model_note + "), " +
-                      pressure_text(answer.input.pressure_Pa), width);
+  paragraph(text,
+            "model " + answer.model_kind + " (" + answer.model_note + "), " + pressure_text(answer.input.pressure_Pa),
+            width);
   text += "\nvapour pressure\n";
   for (int i = 0; i < answer.mixture.size(); ++i) {
     const auto at = static_cast<std::size_t>(i);
     const PressureSet& set = answer.mixture.component(i).pressure.set();
     paragraph(text,
               answer.mixture.component(i).id + ": " +
-                  (set.source == "user" ? std::string(to_string(set.form)) + ", the user's own" : set.id) + ", " + range_text(set),
+                  (set.source == "user" ? std::string(to_string(set.form)) + ", the user's own" : set.id) + ", " +
+                  range_text(set),
               width, first(answer.pressure_evidence[at]), "     ");
   }
   text += "\npairs\n";
@@ -37,7 +41,9 @@ std::string vouch_text(const Answer& answer, int width) {
               answer.mixture.component(pair.i).id + " + " + answer.mixture.component(pair.j).id + ": " + pair.record,
               width, first(pair.evidence), "     ");
   }
-  text += "\nevidence: F fitted, inside its range; X stretched beyond it; P predicted from groups; U the user's own; 0 none\n";
+  text +=
+      "\nevidence: F fitted, inside its range; X stretched beyond it; P predicted from groups; U the user's own; 0 "
+      "none\n";
   text += "\nsources\n";
   for (const std::string& line : answer.provenance) {
     paragraph(text, line, width, "  ", "    ");

@@ -23,9 +23,7 @@ constexpr const char* kWritable = "a file that can be written";
 
 /// A file descriptor that closes itself, and a temporary file that goes away unless it was renamed.
 struct TemporaryFile {
-  explicit TemporaryFile(std::string target) : path(std::move(target)) {
-    descriptor = ::mkstemp(path.data());
-  }
+  explicit TemporaryFile(std::string target) : path(std::move(target)) { descriptor = ::mkstemp(path.data()); }
   TemporaryFile(const TemporaryFile&) = delete;
   TemporaryFile& operator=(const TemporaryFile&) = delete;
   ~TemporaryFile() {

@@ -35,7 +35,8 @@ TEST(SplitScan, FindsASplitThatNoRootShows) {
 /// Every edge miscible, the middle of the triangle not: three like pairs beside one unlike (spinodal of A12 = 1.8,
 /// A13 = -1.8, A23 = 1.8 lies inside).
 TEST(SplitScan, LooksInsideTernaryFaces) {
-  const Mixture mixture = margules_mixture({350.0, 352.0, 354.0}, {{0.0, 1.9, -1.9}, {1.9, 0.0, 1.9}, {-1.9, 1.9, 0.0}});
+  const Mixture mixture =
+      margules_mixture({350.0, 352.0, 354.0}, {{0.0, 1.9, -1.9}, {1.9, 0.0, 1.9}, {-1.9, 1.9, 0.0}});
   const std::vector<SplitWitness> witnesses = scan_for_splits(mixture, kAtmosphere_Pa);
   ASSERT_EQ(witnesses.size(), 1U);
   EXPECT_EQ(witnesses[0].members.size(), 3);

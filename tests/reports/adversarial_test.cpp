@@ -2,9 +2,9 @@
 /// Source of the expected values: tests/reference/adversarial_cases.json (derived here; method named in each record).
 #include <gtest/gtest.h>
 
+#include <algorithm>
 #include <cmath>
 #include <functional>
-#include <algorithm>
 #include <map>
 #include <set>
 #include <sstream>
@@ -59,7 +59,8 @@ bool needs_two_liquids(const Check& c) {
     return true;
   }
   const Json& list = c.expected.at("azeotropes");
-  return std::any_of(list.begin(), list.end(), [](const Json& item) { return item.value("phase", "") == "heterogeneous"; });
+  return std::any_of(list.begin(), list.end(),
+                     [](const Json& item) { return item.value("phase", "") == "heterogeneous"; });
 }
 
 void check_azeotropes(const Check& c) {
@@ -73,7 +74,8 @@ void check_azeotropes(const Check& c) {
     ++expected;
     bool matched = false;
     for (const Json& candidate : with_components(found, wanted.at("components"))) {
-      if (composition_difference(candidate.at("mole_fractions"), wanted.at("mole_fractions")) > c.tolerance("x", 1e-6)) {
+      if (composition_difference(candidate.at("mole_fractions"), wanted.at("mole_fractions")) >
+          c.tolerance("x", 1e-6)) {
         continue;
       }
       matched = true;
@@ -165,7 +167,8 @@ void check_verdicts(const Check& c, const Json& verdicts) {
     const std::string verdict = c.product(id).at("verdict");
     const std::string allowed = wanted;
     // "no-call or shut" lists alternatives
-    EXPECT_NE((" " + allowed + " ").find(" " + verdict + " "), std::string::npos) << id << ": " << verdict << " not " << allowed;
+    EXPECT_NE((" " + allowed + " ").find(" " + verdict + " "), std::string::npos)
+        << id << ": " << verdict << " not " << allowed;
   }
 }
 
@@ -187,7 +190,8 @@ void check_rejected(const Check& c) {
     const auto candidates = with_components(found, wanted.at("components"));
     ASSERT_EQ(candidates.size(), 1U) << found.dump();
     for (std::size_t i = 0; i < wanted.at("components").size(); ++i) {
-      EXPECT_NEAR(x_of(candidates[0].at("mole_fractions"), wanted.at("components")[i]), wanted.at("x")[i].get<double>(), 1e-6);
+      EXPECT_NEAR(x_of(candidates[0].at("mole_fractions"), wanted.at("components")[i]), wanted.at("x")[i].get<double>(),
+                  1e-6);
     }
     EXPECT_NEAR(candidates[0].at("temperature_K").get<double>(), wanted.at("T_K").get<double>(), 1e-4);
   }
@@ -202,7 +206,9 @@ double stage_head(const Check& c, int stages) {
   return x_of(run.result.at("stages").at("x").back(), "A");
 }
 
-double distance_of_feed(const Check& c) { return c.block("feed").at("distance").at("value").get<double>(); }
+double distance_of_feed(const Check& c) {
+  return c.block("feed").at("distance").at("value").get<double>();
+}
 
 double best_stream_recovery(const Check& c, const std::string& id, double least_purity) {
   double recovery = 0.0;
@@ -215,7 +221,8 @@ double best_stream_recovery(const Check& c, const std::string& id, double least_
   return recovery;
 }
 
-bool has_first_column(const Check& c, const char* split, const Json& distillate, const Json& bottoms, double tolerance) {
+bool has_first_column(const Check& c, const char* split, const Json& distillate, const Json& bottoms,
+                      double tolerance) {
   const Json& components = c.block("components");
   for (const Json& sequence : c.block("sequences")) {
     const Json& column = sequence.at("columns").at(0);
@@ -260,7 +267,9 @@ const std::map<std::string, Checker>& checkers() {
        }},
       {"proof", [](const Check& c) { EXPECT_EQ(c.block("proof").at("status"), c.expected.at("proof")); }},
       {"face_reason",
-       [](const Check& c) { EXPECT_EQ(c.block("proof").at("faces").back().at("status"), c.expected.at("face_reason")); }},
+       [](const Check& c) {
+         EXPECT_EQ(c.block("proof").at("faces").back().at("status"), c.expected.at("face_reason"));
+       }},
       {"index_sum",
        [](const Check& c) {
          const Json& sum = c.block("proof").at("faces").back().at("index").at("sum");
@@ -321,9 +330,14 @@ const std::map<std::string, Checker>& checkers() {
          }
        }},
       {"verdicts", [](const Check& c) { check_verdicts(c, c.expected.at("verdicts")); }},
-      {"verdict_A", [](const Check& c) { check_verdicts(c, Json{{"A", c.expected.at("verdict_A")}}); }},
+      {"verdict_A",
+       [](const Check& c) {
+         check_verdicts(c, Json{{"A", c.expected.at("verdict_A")}});
+       }},
       {"verdict_with_10_stages",
-       [](const Check& c) { check_verdicts(c, Json{{"A", c.expected.at("verdict_with_10_stages")}}); }},
+       [](const Check& c) {
+         check_verdicts(c, Json{{"A", c.expected.at("verdict_with_10_stages")}});
+       }},
       {"verdict_unlimited",
        [](const Check& c) {
          Json problem = c.problem.at("case");
@@ -347,7 +361,8 @@ const std::map<std::string, Checker>& checkers() {
        }},
       {"feed_distance_L2_mole",
        [](const Check& c) {
-         EXPECT_NEAR(distance_of_feed(c), c.expected.at("feed_distance_L2_mole").get<double>(), c.tolerance("distance", 1e-6));
+         EXPECT_NEAR(distance_of_feed(c), c.expected.at("feed_distance_L2_mole").get<double>(),
+                     c.tolerance("distance", 1e-6));
        }},
       {"feed_distance",
        [](const Check& c) { EXPECT_NEAR(distance_of_feed(c), c.expected.at("feed_distance").get<double>(), 1e-9); }},
@@ -356,7 +371,8 @@ const std::map<std::string, Checker>& checkers() {
          const Json& point = c.block("feed").at("distance").at("point");
          const Json& components = c.block("components");
          for (std::size_t i = 0; i < components.size(); ++i) {
-           EXPECT_NEAR(x_of(point, components[i].at("id")), c.expected.at("nearest_boundary_point")[i].get<double>(), 1e-4);
+           EXPECT_NEAR(x_of(point, components[i].at("id")), c.expected.at("nearest_boundary_point")[i].get<double>(),
+                       1e-4);
          }
        }},
       {"feed_residue_curve_ends_at",
@@ -396,7 +412,8 @@ const std::map<std::string, Checker>& checkers() {
        }},
       {"best_recovery_alpha",
        [](const Check& c) {
-         EXPECT_NEAR(best_stream_recovery(c, "alpha", 0.995), c.expected.at("best_recovery_alpha").get<double>(), c.tolerance("recovery", 2e-3));
+         EXPECT_NEAR(best_stream_recovery(c, "alpha", 0.995), c.expected.at("best_recovery_alpha").get<double>(),
+                     c.tolerance("recovery", 2e-3));
        }},
       {"purity_limit_mole_A",
        [](const Check& c) {
@@ -427,11 +444,13 @@ const std::map<std::string, Checker>& checkers() {
        }},
       {"recovery_A_at_limit",
        [](const Check& c) {
-         EXPECT_NEAR(c.product("A").at("recovery").get<double>(), c.expected.at("recovery_A_at_limit").get<double>(), 1e-6);
+         EXPECT_NEAR(c.product("A").at("recovery").get<double>(), c.expected.at("recovery_A_at_limit").get<double>(),
+                     1e-6);
        }},
       {"recovery_B_at_limit",
        [](const Check& c) {
-         EXPECT_NEAR(c.product("B").at("recovery").get<double>(), c.expected.at("recovery_B_at_limit").get<double>(), 1e-6);
+         EXPECT_NEAR(c.product("B").at("recovery").get<double>(), c.expected.at("recovery_B_at_limit").get<double>(),
+                     1e-6);
        }},
       {"limited_by",
        [](const Check& c) {
@@ -444,15 +463,19 @@ const std::map<std::string, Checker>& checkers() {
        }},
       {"azeotrope_T_K",
        [](const Check& c) {
-         EXPECT_NEAR(c.block("feed").at("bubble_temperature_K").get<double>(), c.expected.at("azeotrope_T_K").get<double>(),
-                     c.tolerance("T_K", 1e-4));
+         EXPECT_NEAR(c.block("feed").at("bubble_temperature_K").get<double>(),
+                     c.expected.at("azeotrope_T_K").get<double>(), c.tolerance("T_K", 1e-4));
        }},
       {"x_A_after_1_stage",
        [](const Check& c) { EXPECT_NEAR(stage_head(c, 1), c.expected.at("x_A_after_1_stage").get<double>(), 1e-9); }},
       {"x_A_after_10_stages",
-       [](const Check& c) { EXPECT_NEAR(stage_head(c, 10), c.expected.at("x_A_after_10_stages").get<double>(), 1e-9); }},
+       [](const Check& c) {
+         EXPECT_NEAR(stage_head(c, 10), c.expected.at("x_A_after_10_stages").get<double>(), 1e-9);
+       }},
       {"x_A_after_25_stages",
-       [](const Check& c) { EXPECT_NEAR(stage_head(c, 25), c.expected.at("x_A_after_25_stages").get<double>(), 1e-9); }},
+       [](const Check& c) {
+         EXPECT_NEAR(stage_head(c, 25), c.expected.at("x_A_after_25_stages").get<double>(), 1e-9);
+       }},
       {"x_A_after_25_stages_from_feed",
        [](const Check& c) {
          EXPECT_NEAR(stage_head(c, 25), c.expected.at("x_A_after_25_stages_from_feed").get<double>(), 1e-8);
@@ -462,13 +485,22 @@ const std::map<std::string, Checker>& checkers() {
 }
 
 /// Facts of a record that need heteroazeotropes, pressure sweeps or batch cuts of a simple still, which this program
-/// does not compute yet; values that restate the input; and comments. Listed by name so that nothing is skipped silently.
+/// does not compute yet; values that restate the input; and comments. Listed by name so that nothing is skipped
+/// silently.
 bool not_checked_here(const std::string& key) {
-  static const std::set<std::string> keys = {
-      "ternary_heteroazeotropes", "binary_AB_hetero", "transversal_eigenvalue_C", "vanishing_pressure_atm",
-      "vanishing_temperature_K",  "rayleigh_fraction_left_when_pot_x_A_0.30",     "types_may_be",
-      "verdict_note",             "three_column_path_to_alpha",                   "box_budget_respected",
-      "azeotropes_may_be_listed", "critical_pressure_Pa", "ln_alpha_at_pure_A"};
+  static const std::set<std::string> keys = {"ternary_heteroazeotropes",
+                                             "binary_AB_hetero",
+                                             "transversal_eigenvalue_C",
+                                             "vanishing_pressure_atm",
+                                             "vanishing_temperature_K",
+                                             "rayleigh_fraction_left_when_pot_x_A_0.30",
+                                             "types_may_be",
+                                             "verdict_note",
+                                             "three_column_path_to_alpha",
+                                             "box_budget_respected",
+                                             "azeotropes_may_be_listed",
+                                             "critical_pressure_Pa",
+                                             "ln_alpha_at_pure_A"};
   return keys.count(key) != 0;
 }
 

@@ -24,9 +24,10 @@ TEST(CaseAmounts, MassPercent) {
 }
 
 TEST(CaseAmounts, TheSameMixtureInEveryBasis) {
-  for (const char* stream : {R"({"acetone": "0.5 w/w", "water": "0.5 w/w"})", R"({"acetone": "500 g/kg", "water": "rest"})",
-                             R"({"acetone": "2 kg", "water": "2000 g"})", R"({"acetone": "500000 ppm", "water": "balance"})",
-                             R"({"acetone": "50,0 wt%", "water": "50\u00a0wt%"})"}) {
+  for (const char* stream :
+       {R"({"acetone": "0.5 w/w", "water": "0.5 w/w"})", R"({"acetone": "500 g/kg", "water": "rest"})",
+        R"({"acetone": "2 kg", "water": "2000 g"})", R"({"acetone": "500000 ppm", "water": "balance"})",
+        R"({"acetone": "50,0 wt%", "water": "50\u00a0wt%"})"}) {
     EXPECT_NEAR(mole_fraction(case_from(with_stream(stream)), "acetone"), kAcetoneOfHalf, 1e-5) << stream;
   }
   const Case moles = case_from(with_stream(R"({"acetone": "30 mol%", "water": "70 mol%"})"));
@@ -62,20 +63,23 @@ TEST(CaseAmounts, RestIsWhatIsMissing) {
   const Case input = case_from(with_stream(R"({"acetone": "41 wt%", "water": "rest", "residue": "2 wt%"})"));
   EXPECT_NEAR(input.stream[1].mass_fraction, 0.57, 1e-12);
   EXPECT_TRUE(any_contains(input.notes, "water is the rest: 57 wt%"));
-  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "100 wt%", "water": "rest"})")), "/stream/water", "nothing left"));
-  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "rest", "water": "rest", "ethanol": "5 wt%"})")), "/stream/water",
-                    "second \"rest\""));
+  EXPECT_TRUE(
+      tells(problems_of(with_stream(R"({"acetone": "100 wt%", "water": "rest"})")), "/stream/water", "nothing left"));
+  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "rest", "water": "rest", "ethanol": "5 wt%"})")),
+                    "/stream/water", "second \"rest\""));
   EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "5 kg", "water": "rest"})")), "/stream/water", "rest"));
 }
 
 TEST(CaseAmounts, RangesUseTheirMiddle) {
-  const Case input = case_from(with_stream(R"({"n-heptane": "55-75 wt%", "ethyl acetate": "20-40 wt%", "IPA": "<10 wt%"})"));
+  const Case input =
+      case_from(with_stream(R"({"n-heptane": "55-75 wt%", "ethyl acetate": "20-40 wt%", "IPA": "<10 wt%"})"));
   EXPECT_NEAR(input.stream[0].mass_fraction, 0.65, 1e-12);
   EXPECT_NEAR(*input.stream[0].low, 0.55, 1e-12);
   EXPECT_NEAR(*input.stream[0].high, 0.75, 1e-12);
   EXPECT_EQ(input.stream[2].low, 0.0);
   EXPECT_TRUE(any_contains(input.notes, "range"));
-  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "10-20 wt%", "water": "30-40 wt%"})")), "/stream", "40 to 60"));
+  EXPECT_TRUE(
+      tells(problems_of(with_stream(R"({"acetone": "10-20 wt%", "water": "30-40 wt%"})")), "/stream", "40 to 60"));
 }
 
 TEST(CaseAmounts, ResidueIsKeptInTheBalanceOnly) {
@@ -111,22 +115,28 @@ TEST(CaseAmounts, ZeroAmountsAreDroppedWithANote) {
 }
 
 TEST(CaseAmounts, OneBasisForAll) {
-  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "50 wt%", "water": "50 mol%"})")), "/stream/water", "same basis"));
-  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "50 wt%", "water": "50 kg"})")), "/stream/water", "same basis"));
+  EXPECT_TRUE(
+      tells(problems_of(with_stream(R"({"acetone": "50 wt%", "water": "50 mol%"})")), "/stream/water", "same basis"));
+  EXPECT_TRUE(
+      tells(problems_of(with_stream(R"({"acetone": "50 wt%", "water": "50 kg"})")), "/stream/water", "same basis"));
 }
 
 TEST(CaseAmounts, TwoToTwelveComponents) {
   EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "100 wt%"})")), "/stream", "one component"));
-  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "98 wt%", "residue": "2 wt%"})")), "/stream", "one component"));
-  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "50 wt%", "water": "0 wt%", "residue": "50 wt%"})")), "/stream", "one component"));
-  const char* thirteen = R"({"acetone": "1 mol", "methanol": "1 mol", "ethanol": "1 mol", "water": "1 mol", "1-propanol": "1 mol",
+  EXPECT_TRUE(
+      tells(problems_of(with_stream(R"({"acetone": "98 wt%", "residue": "2 wt%"})")), "/stream", "one component"));
+  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "50 wt%", "water": "0 wt%", "residue": "50 wt%"})")),
+                    "/stream", "one component"));
+  const char* thirteen =
+      R"({"acetone": "1 mol", "methanol": "1 mol", "ethanol": "1 mol", "water": "1 mol", "1-propanol": "1 mol",
       "2-propanol": "1 mol", "toluene": "1 mol", "benzene": "1 mol", "n-hexane": "1 mol", "n-heptane": "1 mol",
       "ethyl acetate": "1 mol", "THF": "1 mol", "chloroform": "1 mol"})";
   EXPECT_TRUE(tells(problems_of(with_stream(thirteen)), "/stream", "13 components"));
 }
 
 TEST(CaseAmounts, NegativeAndNotANumber) {
-  const auto problems = problems_of(with_stream(R"({"acetone": "-3 wt%", "water": "nan wt%", "ethanol": "1,234 wt%"})"));
+  const auto problems =
+      problems_of(with_stream(R"({"acetone": "-3 wt%", "water": "nan wt%", "ethanol": "1,234 wt%"})"));
   EXPECT_TRUE(tells(problems, "/stream/acetone", "below zero"));
   EXPECT_TRUE(tells(problems, "/stream/water", "not a finite number"));
   EXPECT_TRUE(tells(problems, "/stream/ethanol", "comma"));

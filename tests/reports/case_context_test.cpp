@@ -1,9 +1,9 @@
 /// Readers of single values, and where a problem is said to be.
-#include "reports/case_parts.hpp"
-
 #include <gtest/gtest.h>
 
 #include <nlohmann/json.hpp>
+
+#include "reports/case_parts.hpp"
 
 namespace stillshed {
 namespace {

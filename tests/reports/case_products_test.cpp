@@ -37,16 +37,18 @@ TEST(CaseProducts, OnlyARecoveryGetsTheDefaultPurityBeside) {
 }
 
 TEST(CaseProducts, RefusedTests) {
-  for (const char* test : {"99.5 wt%", "= 99.5 wt%", "> 99.5 wt%", "<= 99.5 wt%", "water >= 0.1 wt%", ">= 101 wt%", ">= 100 wt%",
-                           ">= 99.5 vol%", ">= 99.5", ">= 99.5 %", "ethanol <= 1 wt%", ">= -1 wt%", ">= 95-99 wt%", "recovery >= 120 %",
-                           "recovery <= 50 %", "water <= 0 wt%"}) {
+  for (const char* test : {"99.5 wt%", "= 99.5 wt%", "> 99.5 wt%", "<= 99.5 wt%", "water >= 0.1 wt%", ">= 101 wt%",
+                           ">= 100 wt%", ">= 99.5 vol%", ">= 99.5", ">= 99.5 %", "ethanol <= 1 wt%", ">= -1 wt%",
+                           ">= 95-99 wt%", "recovery >= 120 %", "recovery <= 50 %", "water <= 0 wt%"}) {
     EXPECT_EQ(problems_of(with_products(R"({"acetone": [")" + std::string(test) + "\"]}")).size(), 1U) << test;
   }
 }
 
 TEST(CaseProducts, OnlyWhatIsInTheStreamAndOnlyOnce) {
-  EXPECT_TRUE(tells(problems_of(with_products(R"({"ethanol": [">= 99 wt%"]})")), "/products/ethanol", "not in the stream"));
-  EXPECT_TRUE(tells(problems_of(with_products(R"({"IPA": [">= 99 wt%"], "2-propanol": [">= 98 wt%"]})")), "/products/2-propanol", "twice"));
+  EXPECT_TRUE(
+      tells(problems_of(with_products(R"({"ethanol": [">= 99 wt%"]})")), "/products/ethanol", "not in the stream"));
+  EXPECT_TRUE(tells(problems_of(with_products(R"({"IPA": [">= 99 wt%"], "2-propanol": [">= 98 wt%"]})")),
+                    "/products/2-propanol", "twice"));
   EXPECT_FALSE(problems_of(with_products("{}")).empty());
   EXPECT_FALSE(problems_of(with_products(R"({"acetone": 99.5})")).empty());
 }

@@ -47,7 +47,6 @@ TEST(CaseReader, DefaultsAreNoted) {
   ASSERT_EQ(input.products.size(), 2U);
   EXPECT_TRUE(input.products[1].default_tests);
   EXPECT_EQ(input.products[1].tests[0].component, 1);
-  EXPECT_TRUE(any_contains(input.notes, "99.5 wt%"));
 }
 
 TEST(CaseReader, AllProblemsAtOnce) {
@@ -68,14 +67,16 @@ TEST(CaseReader, AllProblemsAtOnce) {
 
 TEST(CaseReader, OnlyOurObjects) {
   for (const char* text : {"[]", "3", "{}", R"({"stillshed_case": 1})", R"({"stillshed_case": 1, "stream": []})",
-                           R"({"stillshed_case": 1, "stream": {}})", R"({"stillshed_case": "1", "stream": {"acetone": "1 kg", "water": "1 kg"}})",
+                           R"({"stillshed_case": 1, "stream": {}})",
+                           R"({"stillshed_case": "1", "stream": {"acetone": "1 kg", "water": "1 kg"}})",
                            R"({"stillshed_case": 1, "stream": {"acetone": 41, "water": 59}})"}) {
     EXPECT_FALSE(problems_of(text).empty()) << text;
   }
 }
 
 TEST(CaseReader, TotalInMolesIsOfWhatBoils) {
-  const Case input = case_from(with_stream(R"({"acetone": "50 mol%", "water": "50 mol%", "residue": "10 wt%"})", R"(, "amount": "2 kmol")"));
+  const Case input = case_from(
+      with_stream(R"({"acetone": "50 mol%", "water": "50 mol%", "residue": "10 wt%"})", R"(, "amount": "2 kmol")"));
   EXPECT_NEAR(*input.amount_kg, (58.08 + 18.015) / 0.9, 0.01);
 }
 

@@ -22,7 +22,8 @@ TEST(CaseStream, NamesSynonymsAndCasNumbers) {
 TEST(CaseStream, DuplicatesBySynonymAndByCas) {
   EXPECT_TRUE(tells(problems_of(with_stream(R"({"IPA": "50 wt%", "isopropanol": "50 wt%"})")), "/stream/isopropanol",
                     "the same as \"IPA\""));
-  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetone": "50 wt%", "67-64-1": "50 wt%"})")), "/stream/67-64-1", "acetone"));
+  EXPECT_TRUE(
+      tells(problems_of(with_stream(R"({"acetone": "50 wt%", "67-64-1": "50 wt%"})")), "/stream/67-64-1", "acetone"));
   EXPECT_TRUE(tells(problems_of(R"({"stillshed_case": 1, "stream": {"acetone": "50 wt%", "acetone": "50 wt%"}})"),
                     "/stream/acetone", "twice"));
 }
@@ -34,7 +35,8 @@ TEST(CaseStream, AmbiguousNamesAreRefusedWithTheChoices) {
 }
 
 TEST(CaseStream, UnknownNamesGetSuggestionsNeverCorrections) {
-  EXPECT_TRUE(tells(problems_of(with_stream(R"({"acetonee": "50 wt%", "water": "50 wt%"})")), "/stream/acetonee", "acetone"));
+  EXPECT_TRUE(
+      tells(problems_of(with_stream(R"({"acetonee": "50 wt%", "water": "50 wt%"})")), "/stream/acetonee", "acetone"));
 }
 
 TEST(CaseStream, WithComponentsEveryNameMustBeThere) {

@@ -33,15 +33,27 @@ TEST(Cautions, SubstancesBringTheirOwn) {
     const char* code;
     bool expected;
   } rows[] = {
-      {"THF", "water", "C2", true},       {"toluene", "water", "C2", false},   {"DMSO", "water", "C4", true},
-      {"DMF", "water", "C5", true},       {"nitromethane", "water", "C7", true}, {"acetone", "chloroform", "C9", true},
-      {"DCM", "triethylamine", "C9", true}, {"acetone", "water", "C9", false},  {"diethyl ether", "ethanol", "C11", true},
-      {"acetone", "water", "C12", true},  {"toluene", "methanol", "C13", true}, {"benzene", "methanol", "C14", true},
-      {"NMP", "water", "C15", true},      {"DCM", "methanol", "C16", true},    {"methanol", "water", "C22", true},
-      {"acetone", "water", "C1", true},   {"acetone", "water", "C14", false},
+      {"THF", "water", "C2", true},
+      {"toluene", "water", "C2", false},
+      {"DMSO", "water", "C4", true},
+      {"DMF", "water", "C5", true},
+      {"nitromethane", "water", "C7", true},
+      {"acetone", "chloroform", "C9", true},
+      {"DCM", "triethylamine", "C9", true},
+      {"acetone", "water", "C9", false},
+      {"diethyl ether", "ethanol", "C11", true},
+      {"acetone", "water", "C12", true},
+      {"toluene", "methanol", "C13", true},
+      {"benzene", "methanol", "C14", true},
+      {"NMP", "water", "C15", true},
+      {"DCM", "methanol", "C16", true},
+      {"methanol", "water", "C22", true},
+      {"acetone", "water", "C1", true},
+      {"acetone", "water", "C14", false},
   };
   for (const auto& row : rows) {
-    EXPECT_EQ(find(vouched(half(row.a, row.b)), row.code) != nullptr, row.expected) << row.a << " " << row.b << " " << row.code;
+    EXPECT_EQ(find(vouched(half(row.a, row.b)), row.code) != nullptr, row.expected)
+        << row.a << " " << row.b << " " << row.code;
   }
 }
 

@@ -1,11 +1,14 @@
 #include "reports/check_task.hpp"
 
 #include "tests/reports/input_fixtures.hpp"
+#include "tests/reports/validate.hpp"
 
 namespace stillshed::test {
 namespace {
 
-Facts a_copy_of_the_facts() { return catalog().facts(); }
+Facts a_copy_of_the_facts() {
+  return catalog().facts();
+}
 
 TEST(CheckTask, EveryPublishedValueIsMet) {
   const CheckAnswer answer = run_checks(catalog());
@@ -16,11 +19,14 @@ TEST(CheckTask, EveryPublishedValueIsMet) {
   }
   EXPECT_EQ(answer.mismatches(), 0);
   EXPECT_NE(check_text(answer).find("all agree"), std::string::npos);
+  EXPECT_TRUE(
+      testing_support::is_valid(check_json(answer), STILLSHED_TEST_DATA "/../reports/schema/check.schema.json"));
 }
 
 /// Each kind of check notices a wrong number.
 TEST(CheckTask, AWrongValueIsAMismatch) {
-  for (const CheckKind kind : {CheckKind::activity, CheckKind::boiling_point, CheckKind::fenske, CheckKind::azeotropes}) {
+  for (const CheckKind kind :
+       {CheckKind::activity, CheckKind::boiling_point, CheckKind::fenske, CheckKind::azeotropes}) {
     Facts facts = a_copy_of_the_facts();
     std::vector<CheckValue> kept;
     for (CheckValue check : facts.check_values) {

@@ -18,7 +18,8 @@ namespace {
 using testing::HasSubstr;
 using testing::Not;
 
-const std::vector<std::string> kQuick = {"acetone=42", "methanol=33", "water=25", "--basis", "wt%", "--pressure", "1atm"};
+const std::vector<std::string> kQuick = {"acetone=42", "methanol=33", "water=25", "--basis",
+                                         "wt%",        "--pressure",  "1atm"};
 
 std::vector<std::string> quick(const std::string& task, const std::vector<std::string>& more = {}) {
   std::vector<std::string> words = {task};
@@ -77,6 +78,8 @@ TEST(Cli, EveryTaskHasHelpAndRuns) {
     EXPECT_FALSE(result.out.empty());
   }
   EXPECT_EQ(run({"name", "MEK"}).exit, 0);
+  EXPECT_EQ(run({"name", "MEK", "--json", "-"}).result.at("names").at(0).at("id"), "2-butanone");
+  EXPECT_EQ(run({"check", "--json", "-"}).result.at("mismatches"), 0);
   EXPECT_EQ(run({}).exit, 2);
   EXPECT_EQ(run({"--version"}).exit, 0);
 }
@@ -86,8 +89,10 @@ TEST(BadInput, MalformedJsonHasLineAndColumn) {
 }
 
 TEST(BadInput, UnknownKey) {
-  expect_refused({"survey", case_file(R"({"stillshed_case": 1, "stream": {"acetone": "1 kg", "water": "1 kg"}, "presure": "1 atm"})")},
-                 {"/presure", "did you mean \"pressure\"?"});
+  expect_refused(
+      {"survey",
+       case_file(R"({"stillshed_case": 1, "stream": {"acetone": "1 kg", "water": "1 kg"}, "presure": "1 atm"})")},
+      {"/presure", "did you mean \"pressure\"?"});
 }
 
 TEST(BadInput, WrongUnit) {
@@ -103,8 +108,8 @@ TEST(BadInput, NegativeAndNotANumber) {
 TEST(BadInput, OneComponentAndThirteen) {
   expect_refused({"survey", "acetone=100", "--basis", "wt%"}, {"one component"});
   std::vector<std::string> words = {"survey", "--basis", "mol"};
-  for (const char* name : {"acetone", "methanol", "ethanol", "water", "1-propanol", "2-propanol", "toluene", "benzene", "n-hexane",
-                           "n-heptane", "THF", "chloroform", "acetonitrile"}) {
+  for (const char* name : {"acetone", "methanol", "ethanol", "water", "1-propanol", "2-propanol", "toluene", "benzene",
+                           "n-hexane", "n-heptane", "THF", "chloroform", "acetonitrile"}) {
     words.push_back(std::string(name) + "=1");
   }
   expect_refused(words, {"13 components"});
@@ -128,7 +133,8 @@ TEST(BadInput, PressureThatIsNone) {
 /// A pressure no data reach is an answer, not bad input: NO CALL with the reason.
 TEST(Limits, PressureOutsideEveryRange) {
   for (const auto& [pressure, reason] : {std::pair("200 bar", "above-critical"), std::pair("1 Pa", "outside-data")}) {
-    const RunResult result = run({"reach", "acetone=42", "methanol=58", "--basis", "wt%", "--pressure", pressure, "--json", "-"});
+    const RunResult result =
+        run({"reach", "acetone=42", "methanol=58", "--basis", "wt%", "--pressure", pressure, "--json", "-"});
     EXPECT_EQ(result.exit, 3) << pressure << result.err;
     EXPECT_THAT(result.result.at("status").dump(), HasSubstr(reason));
     for (const Json& product : result.result.at("products")) {
@@ -158,7 +164,9 @@ TEST(BadInput, AllProblemsAtOnce) {
                  {"4 problems", "acetonee", "furlong", "parsec"});
 }
 
-TEST(BadInput, MisspeltTask) { expect_refused({"reprot"}, {"did you mean \"report\"?"}); }
+TEST(BadInput, MisspeltTask) {
+  expect_refused({"reprot"}, {"did you mean \"report\"?"});
+}
 
 TEST(BadInput, NamesAreRefusedWithChoices) {
   const RunResult result = run({"name", "MEK", "TCE"});
@@ -184,7 +192,9 @@ TEST(Interrupted, ExitsWith130AndAWholeResult) {
   for (int i = 0; i < 12; ++i) {
     const std::string id = "c" + std::to_string(i);
     problem["components"].push_back(
-        {{"id", id}, {"molar_mass_g_mol", 60}, {"vapour_pressure", {{"form", "clausius-clapeyron"}, {"boiling_point_K", 350.0 + i}, {"H_K", 4000.0}}}});
+        {{"id", id},
+         {"molar_mass_g_mol", 60},
+         {"vapour_pressure", {{"form", "clausius-clapeyron"}, {"boiling_point_K", 350.0 + i}, {"H_K", 4000.0}}}});
     problem["stream"][id] = "1 mol";
     Json row = Json::array();
     for (int j = 0; j < 12; ++j) {

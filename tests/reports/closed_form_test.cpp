@@ -118,7 +118,8 @@ void expect_every_barycentre(int n) {
   for (const Json& azeotrope : azeotropes) {
     const double k = static_cast<double>(azeotrope.at("components").size());
     faces.insert(azeotrope.at("components").dump());
-    EXPECT_NEAR(azeotrope.at("temperature_K").get<double>(), 1.0 / (1.0 / 350.0 + 0.6 * (k - 1.0) / (4000.0 * k)), 1e-6);
+    EXPECT_NEAR(azeotrope.at("temperature_K").get<double>(), 1.0 / (1.0 / 350.0 + 0.6 * (k - 1.0) / (4000.0 * k)),
+                1e-6);
     for (const auto& [id, x] : azeotrope.at("mole_fractions").items()) {
       EXPECT_TRUE(std::abs(x.get<double>() - 1.0 / k) < 1e-9 || x == 0.0) << id;
     }
@@ -128,9 +129,15 @@ void expect_every_barycentre(int n) {
   EXPECT_EQ(run.result.at("index_rule").at("holds"), true);
 }
 
-TEST(SymmetricMixture, EightComponents) { expect_every_barycentre(8); }
-TEST(SymmetricMixture, TenComponents) { expect_every_barycentre(10); }
-TEST(SymmetricMixture, TwelveComponents) { expect_every_barycentre(12); }
+TEST(SymmetricMixture, EightComponents) {
+  expect_every_barycentre(8);
+}
+TEST(SymmetricMixture, TenComponents) {
+  expect_every_barycentre(10);
+}
+TEST(SymmetricMixture, TwelveComponents) {
+  expect_every_barycentre(12);
+}
 
 }  // namespace
 }  // namespace stillshed::test

@@ -17,9 +17,31 @@ Problem problem_of(const std::vector<std::string>& words) {
 }
 
 TEST(CommandLine, QuickFormWithEveryOption) {
-  const Command command = read_command_line({"report", "acetone=42", "water=58", "--basis", "wt%", "--pressure", "1atm", "--product",
-                                             "acetone >= 99 wt%", "--product", "water", "--stages", "9", "--json", "-", "--out", "d",
-                                             "--quiet", "--declare", "EU", "--seed", "7", "--model=unifac", "--amount", "3 t"});
+  const Command command = read_command_line({"report",
+                                             "acetone=42",
+                                             "water=58",
+                                             "--basis",
+                                             "wt%",
+                                             "--pressure",
+                                             "1atm",
+                                             "--product",
+                                             "acetone >= 99 wt%",
+                                             "--product",
+                                             "water",
+                                             "--stages",
+                                             "9",
+                                             "--json",
+                                             "-",
+                                             "--out",
+                                             "d",
+                                             "--quiet",
+                                             "--declare",
+                                             "EU",
+                                             "--seed",
+                                             "7",
+                                             "--model=unifac",
+                                             "--amount",
+                                             "3 t"});
   EXPECT_EQ(command.task, Task::report);
   EXPECT_EQ(command.form.stream, (std::vector<std::string>{"acetone=42", "water=58"}));
   EXPECT_EQ(command.form.products.size(), 2U);

@@ -16,7 +16,9 @@ inline const Catalog& catalog() {
   return shared;
 }
 
-inline Case case_from(const std::string& text) { return read_case(text, "case.json", catalog()); }
+inline Case case_from(const std::string& text) {
+  return read_case(text, "case.json", catalog());
+}
 
 inline std::vector<Problem> problems_of(const std::string& text) {
   try {

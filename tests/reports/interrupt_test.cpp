@@ -6,7 +6,9 @@ namespace stillshed {
 namespace {
 
 int seen_by_the_outer_handler = 0;
-void outer_handler(int /*number*/) { ++seen_by_the_outer_handler; }
+void outer_handler(int /*number*/) {
+  ++seen_by_the_outer_handler;
+}
 
 TEST(Interrupt, ASignalAsksToStopAndTheFormerHandlerComesBack) {
   struct sigaction former {};

@@ -55,10 +55,9 @@ TEST(MeasuredMatch, DifferencesAtTheSamePressureInMixtureOrder) {
 
 TEST(MeasuredMatch, DoubtfulTiersAndOtherComponentsAreNotFacts) {
   Facts facts;
-  facts.measured_azeotropes = {record('C', 101325.0, {"a", "b"}, {0.6, 0.4}, 330.0),
-                               record('D', 101325.0, {"a", "b"}, {0.6, 0.4}, 330.0),
-                               record('A', 101325.0, {"a", "z"}, {0.6, 0.4}, 330.0),
-                               record('A', 0.0, {"a", "b"}, {0.6, 0.4}, 330.0)};
+  facts.measured_azeotropes = {
+      record('C', 101325.0, {"a", "b"}, {0.6, 0.4}, 330.0), record('D', 101325.0, {"a", "b"}, {0.6, 0.4}, 330.0),
+      record('A', 101325.0, {"a", "z"}, {0.6, 0.4}, 330.0), record('A', 0.0, {"a", "b"}, {0.6, 0.4}, 330.0)};
   Answer answer = answer_at(101325.0);
   match_measurements(facts, answer);
   EXPECT_TRUE(answer.measured.at(0).empty());
@@ -67,7 +66,8 @@ TEST(MeasuredMatch, DoubtfulTiersAndOtherComponentsAreNotFacts) {
 
 TEST(MeasuredMatch, OnlyTheNearestPressureAndNoDifferencesThere) {
   Facts facts;
-  facts.measured_azeotropes = {record('A', 2e5, {"a", "b"}, {0.5, 0.5}, 350.0), record('B', 9e5, {"a", "b"}, {0.4, 0.6}, 400.0)};
+  facts.measured_azeotropes = {record('A', 2e5, {"a", "b"}, {0.5, 0.5}, 350.0),
+                               record('B', 9e5, {"a", "b"}, {0.4, 0.6}, 400.0)};
   Answer answer = answer_at(101325.0);
   match_measurements(facts, answer);
   ASSERT_EQ(answer.measured.at(0).size(), 1U);

@@ -27,15 +27,18 @@ TEST(ModelChoice, DortmundWhereItCoversEveryPair) {
 
 /// Whatever is chosen, the rule holds: checked on every pair of common solvents.
 TEST(ModelChoice, FollowsTheRuleOnManyPairs) {
-  const std::vector<std::string> ids = {"water", "acetone", "methanol", "tetrahydrofuran", "dimethyl-sulfoxide", "chloroform",
-                                        "ethylene-glycol", "acetonitrile", "triethylamine", "n-methyl-2-pyrrolidone", "toluene"};
+  const std::vector<std::string> ids = {
+      "water",      "acetone",         "methanol",     "tetrahydrofuran", "dimethyl-sulfoxide",
+      "chloroform", "ethylene-glycol", "acetonitrile", "triethylamine",   "n-methyl-2-pyrrolidone",
+      "toluene"};
   int fell_back = 0;
   int missing = 0;
   for (std::size_t a = 0; a < ids.size(); ++a) {
     for (std::size_t b = a + 1; b < ids.size(); ++b) {
       const std::vector<std::string> pair = {ids[a], ids[b]};
       const auto covered = [&](GroupModel model) {
-        return catalog().has_groups(model, pair[0]) && catalog().has_groups(model, pair[1]) && catalog().group_gaps(model, pair).empty();
+        return catalog().has_groups(model, pair[0]) && catalog().has_groups(model, pair[1]) &&
+               catalog().group_gaps(model, pair).empty();
       };
       const ModelChoice choice = choose(pair);
       const bool complete = choice.missing.empty() && choice.refusal.empty();

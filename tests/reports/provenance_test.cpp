@@ -15,7 +15,8 @@ TEST(Provenance, RangesInWords) {
 }
 
 TEST(Provenance, EveryNumberHasALineThatResolves) {
-  const Answer answer = run_case(case_from(with_stream(R"({"acetone": "50 wt%", "methanol": "50 wt%"})")), catalog(), Task::survey);
+  const Answer answer =
+      run_case(case_from(with_stream(R"({"acetone": "50 wt%", "methanol": "50 wt%"})")), catalog(), Task::survey);
   EXPECT_TRUE(any_contains(answer.provenance, "vapour pressure of acetone: acetone/"));
   EXPECT_TRUE(any_contains(answer.provenance, "activity coefficients: "));
   EXPECT_TRUE(any_contains(answer.provenance, "measured azeotrope, tier A"));

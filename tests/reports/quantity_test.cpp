@@ -62,7 +62,8 @@ TEST(Pressure, AsPeopleWriteIt) {
 }
 
 TEST(Pressure, RefusedWithWhatIsAllowed) {
-  for (const char* text : {"1", "1 furlong", "0 bar", "-1 bar", "30 inHg vac", "1-2 bar", "25 degC", "nan bar", "1 mPa"}) {
+  for (const char* text :
+       {"1", "1 furlong", "0 bar", "-1 bar", "30 inHg vac", "1-2 bar", "25 degC", "nan bar", "1 mPa"}) {
     Problems problems;
     EXPECT_FALSE(read_pressure_Pa(text, "/pressure", problems).has_value()) << text;
     ASSERT_EQ(problems.size(), 1U) << text;

@@ -28,9 +28,10 @@ TEST(QuickForm, TheExampleOfTheHelp) {
   form.stages = 25;
   const Written result = write(form);
   EXPECT_TRUE(result.problems.empty());
-  EXPECT_EQ(result.json.dump(),
-            R"({"stillshed_case":1,"stream":{"acetone":"42 wt%","methanol":"33 wt%","water":"23 wt%","residue":"2 wt%"},)"
-            R"("pressure":"1atm","products":{"acetone":[">= 99.5 wt%","water <= 0.3 wt%"],"methanol":[]},"plant":{"stages":25}})");
+  EXPECT_EQ(
+      result.json.dump(),
+      R"({"stillshed_case":1,"stream":{"acetone":"42 wt%","methanol":"33 wt%","water":"23 wt%","residue":"2 wt%"},)"
+      R"("pressure":"1atm","products":{"acetone":[">= 99.5 wt%","water <= 0.3 wt%"],"methanol":[]},"plant":{"stages":25}})");
   EXPECT_EQ(result.spoken.at("/stream/acetone"), "acetone=42");
 }
 

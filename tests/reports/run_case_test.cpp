@@ -15,7 +15,8 @@ Answer run_on(const std::string& stream, const std::string& more, Task task, con
 }
 
 bool incomplete_why(const Answer& answer, const std::string& why) {
-  return std::any_of(answer.incomplete.begin(), answer.incomplete.end(), [&](const Incomplete& item) { return item.why == why; });
+  return std::any_of(answer.incomplete.begin(), answer.incomplete.end(),
+                     [&](const Incomplete& item) { return item.why == why; });
 }
 
 bool all_no_call(const Answer& answer, Reason reason) {
@@ -47,7 +48,8 @@ TEST(RunCase, SurveyOnly) {
 }
 
 TEST(RunCase, AboveTheCriticalPressureNothingIsComputed) {
-  const Answer answer = run_on(R"({"n-heptane": "50 mol%", "toluene": "50 mol%"})", R"(, "pressure": "30 bar")", Task::report);
+  const Answer answer =
+      run_on(R"({"n-heptane": "50 mol%", "toluene": "50 mol%"})", R"(, "pressure": "30 bar")", Task::report);
   EXPECT_FALSE(answer.survey.has_value());
   EXPECT_EQ(answer.exit_code, 3);
   EXPECT_TRUE(all_no_call(answer, Reason::above_critical));
@@ -55,13 +57,16 @@ TEST(RunCase, AboveTheCriticalPressureNothingIsComputed) {
 }
 
 TEST(RunCase, AcidVapourIsNoCallUnlessATrace) {
-  EXPECT_TRUE(all_no_call(run_on(R"({"formic acid": "50 mol%", "water": "50 mol%"})", "", Task::reach), Reason::acid_vapour));
-  const Answer trace = run_on(R"({"formic acid": "0.1 mol%", "water": "50 mol%", "acetone": "49.9 mol%"})", "", Task::reach);
+  EXPECT_TRUE(
+      all_no_call(run_on(R"({"formic acid": "50 mol%", "water": "50 mol%"})", "", Task::reach), Reason::acid_vapour));
+  const Answer trace =
+      run_on(R"({"formic acid": "0.1 mol%", "water": "50 mol%", "acetone": "49.9 mol%"})", "", Task::reach);
   EXPECT_FALSE(all_no_call(trace, Reason::acid_vapour));
 }
 
 TEST(RunCase, AMissingPairIsNamedAndItsFaceNotSurveyed) {
-  const Answer answer = run_on(R"({"ethylene glycol": "50 mol%", "chloroform": "50 mol%"})", R"(, "model": "unifac")", Task::report);
+  const Answer answer =
+      run_on(R"({"ethylene glycol": "50 mol%", "chloroform": "50 mol%"})", R"(, "model": "unifac")", Task::report);
   EXPECT_EQ(answer.exit_code, 3);
   EXPECT_TRUE(all_no_call(answer, Reason::missing_pair));
   ASSERT_TRUE(answer.survey.has_value());
@@ -74,15 +79,18 @@ TEST(RunCase, AMissingPairIsNamedAndItsFaceNotSurveyed) {
 }
 
 TEST(RunCase, TheOtherFacesOfAMixtureWithAMissingPairStay) {
-  const Answer answer = run_on(R"({"ethylene glycol": "30 mol%", "chloroform": "30 mol%", "methanol": "40 mol%"})", R"(, "model": "unifac")", Task::survey);
+  const Answer answer = run_on(R"({"ethylene glycol": "30 mol%", "chloroform": "30 mol%", "methanol": "40 mol%"})",
+                               R"(, "model": "unifac")", Task::survey);
   EXPECT_EQ(answer.exit_code, 3);
   int complete = 0;
   for (const FaceProof& face : answer.survey->faces) {
     complete += face.status == Status::complete ? 1 : 0;
   }
   EXPECT_EQ(complete, 2);
-  const bool found = std::any_of(answer.survey->azeotropes.begin(), answer.survey->azeotropes.end(),
-                                 [](const Azeotrope& azeotrope) { return azeotrope.point.members == Members{1, 2}; });
+  const bool found =
+      std::any_of(answer.survey->azeotropes.begin(), answer.survey->azeotropes.end(), [](const Azeotrope& azeotrope) {
+        return azeotrope.point.members == Members{1, 2};
+      });
   EXPECT_TRUE(found);  // chloroform + methanol
 }
 
@@ -93,13 +101,19 @@ TEST(RunCase, SplittingLiquidsAreIncomplete) {
 }
 
 TEST(RunCase, ManySaltsAndManyUnknownsAreNoCall) {
-  EXPECT_TRUE(all_no_call(run_on(R"({"acetone": "48 wt%", "methanol": "48 wt%", "NaCl": "4 wt%"})", "", Task::reach), Reason::salt_present));
-  EXPECT_TRUE(all_no_call(run_on(R"({"acetone": "45 wt%", "methanol": "45 wt%", "others": "10 wt%"})", "", Task::reach), Reason::unknowns_too_large));
-  EXPECT_FALSE(all_no_call(run_on(R"({"acetone": "50 wt%", "methanol": "49.8 wt%", "NaCl": "0.2 wt%"})", "", Task::reach), Reason::salt_present));
+  EXPECT_TRUE(all_no_call(run_on(R"({"acetone": "48 wt%", "methanol": "48 wt%", "NaCl": "4 wt%"})", "", Task::reach),
+                          Reason::salt_present));
+  EXPECT_TRUE(all_no_call(run_on(R"({"acetone": "45 wt%", "methanol": "45 wt%", "others": "10 wt%"})", "", Task::reach),
+                          Reason::unknowns_too_large));
+  EXPECT_FALSE(
+      all_no_call(run_on(R"({"acetone": "50 wt%", "methanol": "49.8 wt%", "NaCl": "0.2 wt%"})", "", Task::reach),
+                  Reason::salt_present));
 }
 
 TEST(RunCase, FourComponentsHaveASurveyAndNoMap) {
-  const Answer answer = run_on(R"({"acetone": "25 mol%", "methanol": "25 mol%", "chloroform": "25 mol%", "ethanol": "25 mol%"})", "", Task::report);
+  const Answer answer =
+      run_on(R"({"acetone": "25 mol%", "methanol": "25 mol%", "chloroform": "25 mol%", "ethanol": "25 mol%"})", "",
+             Task::report);
   EXPECT_EQ(answer.exit_code, 3);
   EXPECT_EQ(answer.survey->faces.size(), 11U);
   EXPECT_FALSE(answer.chart.has_value());

@@ -8,7 +8,9 @@ namespace stillshed::test {
 namespace {
 
 TEST(VouchTask, SourceRangeAndEvidenceOfEveryParameter) {
-  const Answer answer = run_case(case_from(with_stream(R"({"acetone": "50 wt%", "water": "30 wt%", "methanol": "20 wt%"})")), catalog(), Task::vouch);
+  const Answer answer =
+      run_case(case_from(with_stream(R"({"acetone": "50 wt%", "water": "30 wt%", "methanol": "20 wt%"})")), catalog(),
+               Task::vouch);
   EXPECT_FALSE(answer.survey.has_value());
   const std::string text = vouch_text(answer, 80);
   for (const MixtureComponent& component : answer.mixture.components()) {
@@ -24,8 +26,9 @@ TEST(VouchTask, SourceRangeAndEvidenceOfEveryParameter) {
 }
 
 TEST(VouchTask, MissingPairsStandOut) {
-  const Answer answer = run_case(case_from(with_stream(R"({"ethylene glycol": "50 wt%", "chloroform": "50 wt%"})", R"(, "model": "unifac")")),
-                                 catalog(), Task::vouch);
+  const Answer answer = run_case(
+      case_from(with_stream(R"({"ethylene glycol": "50 wt%", "chloroform": "50 wt%"})", R"(, "model": "unifac")")),
+      catalog(), Task::vouch);
   EXPECT_EQ(answer.exit_code, 3);
   EXPECT_NE(vouch_text(answer).find("missing-pair"), std::string::npos);
 }

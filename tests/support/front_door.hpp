@@ -23,7 +23,8 @@ struct RunResult {
 [[nodiscard]] RunResult run(const std::vector<std::string>& words);
 
 /// Writes `case_json` to a file and runs `stillshed TASK FILE --json -`.
-[[nodiscard]] RunResult run_case(const std::string& task, const Json& case_json, const std::vector<std::string>& extra = {});
+[[nodiscard]] RunResult run_case(const std::string& task, const Json& case_json,
+                                 const std::vector<std::string>& extra = {});
 
 /// The cases of a file in tests/reference.
 [[nodiscard]] Json reference_cases(const std::string& file);
