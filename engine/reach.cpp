@@ -15,6 +15,7 @@ namespace stillshed {
 
 namespace {
 
+constexpr double kExactlyOn = 1e-9;    ///< distance from a boundary below which the charge is taken to lie on it
 constexpr double kSameProduct = 1e-6;  ///< receivers this close share the bound of the stages
 
 std::size_t at(int i) {
@@ -39,19 +40,47 @@ std::optional<NoCall> obstacle(const Mixture& mixture, const Survey& survey, con
   return std::nullopt;
 }
 
-/// Regions to start from: one, or both sides of the boundary the charge lies on.
-std::vector<std::optional<int>> starting_regions(const Chart& chart, const Position& feed) {
-  std::vector<std::optional<int>> result;
-  if (feed.on_boundary && feed.nearest.has_value()) {
-    for (int k = 0; k < static_cast<int>(chart.regions.size()); ++k) {
-      const std::vector<std::string>& ids = chart.regions[at(k)].boundaries;
-      if (std::find(ids.begin(), ids.end(), feed.nearest->boundary) != ids.end()) {
-        result.emplace_back(k);
-      }
-    }
+/// A charge to start from, and the region it counts to.
+struct Start {
+  Composition x;
+  std::optional<int> region;
+  std::string message;
+};
+
+/// x mirrored at the nearest point of its boundary: as close to it, on the other side.
+Composition mirrored(const Composition& x, const Composition& foot) {
+  Composition result = between(x, foot, 2.0);
+  double sum = 0.0;
+  for (double& value : result) {
+    value = std::max(0.0, value);
+    sum += value;
   }
-  if (result.empty()) {
-    result.push_back(feed.region);
+  for (double& value : result) {
+    value /= sum;
+  }
+  return result;
+}
+
+/// One start, or one on each side of the boundary the charge lies on.
+std::vector<Start> starts(const Chart& chart, const Position& feed, const Composition& x) {
+  if (!feed.on_boundary || !feed.nearest.has_value() || chart.boundaries.empty()) {
+    return {{x, feed.region, ""}};
+  }
+  std::vector<Start> result;
+  if (feed.nearest->distance > kExactlyOn) {
+    result.push_back({x, region_at(chart, x), ""});
+    const Composition other = mirrored(x, feed.nearest->point);
+    result.push_back({other, region_at(chart, other),
+                      "from the other side of " + feed.nearest->boundary +
+                          ": the charge is moved across it by twice its " +
+                          "distance, less than 0.001 in mole fractions"});
+    return result;
+  }
+  for (int k = 0; k < static_cast<int>(chart.regions.size()); ++k) {
+    const std::vector<std::string>& ids = chart.regions[at(k)].boundaries;
+    if (std::find(ids.begin(), ids.end(), feed.nearest->boundary) != ids.end()) {
+      result.push_back({x, k, ""});
+    }
   }
   return result;
 }
@@ -114,10 +143,14 @@ Reach reach(const Mixture& mixture, const Survey& survey, const Chart& chart, co
   };
   const int depth = std::min(options.max_depth, static_cast<int>(chart.fixed_points.size()) - 1);
   result.sequences = column_sequences(chart, x, depth);
-  for (const std::optional<int>& region : starting_regions(chart, result.feed)) {
+  for (const Start& start : starts(chart, result.feed, x)) {
     std::vector<int> batches;
     for (const Batch::Mode mode : {Batch::Mode::rectifier, Batch::Mode::stripper}) {
-      batches.push_back(keep(result.batch, run_batch(chart, x, mode, boiling_K, region)));
+      Batch drawn = run_batch(chart, start.x, mode, boiling_K, start.region);
+      if (drawn.status == Status::complete) {
+        drawn.message = start.message;
+      }
+      batches.push_back(keep(result.batch, std::move(drawn)));
       const Batch& batch = result.batch[at(batches.back())];
       if (batch.status != Status::complete) {
         result.status = batch.status;

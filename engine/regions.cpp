@@ -163,11 +163,35 @@ class Subdivision {
     std::vector<std::size_t> order(halves.size());
     std::iota(order.begin(), order.end(), std::size_t{0});
     std::sort(order.begin(), order.end(), [&](std::size_t a, std::size_t b) { return keys[a] < keys[b]; });
+    part_by_longer_reach(halves, keys, order);
     std::vector<Half> result;
     for (const std::size_t k : order) {
       result.push_back(halves[k]);
     }
     halves = std::move(result);
+  }
+
+  /// Curves that a short neighbour keeps on a small circle may coincide there (they arrive along one direction): such
+  /// pairs are compared on the largest circle that both reach.
+  void part_by_longer_reach(const std::vector<Half>& halves, const std::vector<double>& keys,
+                            std::vector<std::size_t>& order) const {
+    constexpr double kSameDirection = 1e-3;
+    const auto swapped = [&](std::size_t a, std::size_t b) {
+      if (is_edge(halves[a]) || is_edge(halves[b]) || std::abs(keys[a] - keys[b]) > kSameDirection) {
+        return false;
+      }
+      const std::vector<Composition> points_a = points_of(halves[a]);
+      const std::vector<Composition> points_b = points_of(halves[b]);
+      const double radius = 0.9 * std::min(reach_of(points_a), reach_of(points_b));
+      return turn(angle_at(points_a, radius), angle_at(points_b, radius)) < 0.0;
+    };
+    for (std::size_t pass = 0; pass < order.size(); ++pass) {  // a handful of curves: exchange neighbours
+      for (std::size_t k = 0; k + 1 < order.size(); ++k) {
+        if (swapped(order[k], order[k + 1])) {
+          std::swap(order[k], order[k + 1]);
+        }
+      }
+    }
   }
 
   /// Angles from `start`; edge pieces far below or above every curve.
@@ -235,6 +259,7 @@ RegionSet find_regions(const Mixture& mixture, double pressure_Pa, const std::ve
   for (const Boundary& boundary : boundaries) {
     arcs.push_back({boundary.from, boundary.to, boundary.curve.points, boundary.id});
   }
+  const std::size_t expected = arcs.size() + 1 - fixed_points.size();  // Euler, the outside not counted
   for (auto& face : Subdivision(std::move(arcs), fixed_points.size()).faces()) {
     Region region;
     region.id = "r" + std::to_string(set.regions.size() + 1);
@@ -255,7 +280,7 @@ RegionSet find_regions(const Mixture& mixture, double pressure_Pa, const std::ve
   for (const Region& region : set.regions) {
     covered += region.area;
   }
-  if (set.status == Status::complete && std::abs(covered - 1.0) > 1e-9) {
+  if (set.status == Status::complete && (set.regions.size() != expected || std::abs(covered - 1.0) > 1e-9)) {
     set.status = Status::undecided;
     set.message = "the regions found do not cover the triangle";
   }
