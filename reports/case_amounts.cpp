@@ -190,7 +190,7 @@ void Settlement::note_density(const CaseComponent& component, double density) {
     if (component.record->liquid_density_T_K.has_value()) {
       note += " at " + shortest(*component.record->liquid_density_T_K - 273.15) + " degC";
     }
-    note += " (" + component.record->liquid_density_kg_m3->source + ")";
+    note += " (" + context_.catalog->citation(component.record->liquid_density_kg_m3->source) + ")";
   } else {
     note += " (" + component.density_note + ")";
   }

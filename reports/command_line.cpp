@@ -40,7 +40,7 @@ Problem problem_of(const CLI::ParseError& error) {
 void add_case_options(CLI::App& app, Command& command) {
   app.add_option("case", command.words,
                  "a case file (schema: reports/schema/case.schema.json), or the quick form NAME=AMOUNT ...")
-      ->type_name("CASE|NAME=AMOUNT ...");
+      ->type_name("CASE|NAME=AMOUNT");
   app.add_option("--basis", command.form.basis, "unit of bare amounts: wt%, mol%, vol%, kg, mol, L")->type_name("UNIT");
   app.add_option("--pressure", command.form.pressure, "such as 1atm, \"150 mbar\", 2barg (default 1 atm)");
   app.add_option("--amount", command.form.amount, "of the whole stream, such as \"4200 kg\"");

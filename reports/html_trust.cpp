@@ -44,7 +44,7 @@ std::string proof_words(const Survey& survey) {
       return "The search is complete, but some points could not be told apart by any test: they are listed as one "
              "degenerate record each.";
     case Status::undecided:
-      return "The list of azeotropes is not proved complete: boxes remain that could not be decided.";
+      return "The list of azeotropes is not proved complete: faces or boxes remain that could not be decided.";
     case Status::stopped: return "The search was stopped early: the list of azeotropes may be incomplete.";
     case Status::not_run:
     case Status::not_applicable: return "No proof was run: the azeotropes listed were located, and others may exist.";

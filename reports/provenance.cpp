@@ -72,6 +72,21 @@ void measured_lines(const Answer& answer, std::vector<std::string>& lines) {
   std::for_each(answer.measured_only.begin(), answer.measured_only.end(), add);
 }
 
+void caution_lines(const Answer& answer, const Catalog& catalog, std::vector<std::string>& lines) {
+  for (const Caution& caution : answer.cautions) {
+    for (const CautionRecord& record : catalog.facts().cautions) {
+      if (record.code != caution.code || record.text != caution.text) {
+        continue;
+      }
+      std::string sources;
+      for (const std::string& key : record.sources) {
+        sources += (sources.empty() ? "" : "; ") + catalog.citation(key);
+      }
+      lines.push_back("caution " + record.code + ": " + sources);
+    }
+  }
+}
+
 }  // namespace
 
 std::vector<std::string> provenance_lines(const Answer& answer, const std::vector<const ComponentRecord*>& records,
@@ -81,6 +96,7 @@ std::vector<std::string> provenance_lines(const Answer& answer, const std::vecto
   model_lines(answer, catalog, lines);
   component_lines(records, catalog, lines);
   measured_lines(answer, lines);
+  caution_lines(answer, catalog, lines);
   return lines;
 }
 

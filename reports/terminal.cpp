@@ -258,7 +258,7 @@ void Screen::proof() {
              "); azeotropes of two liquids not searched";
       break;
     case Status::degenerate: line = "proof: complete, but some points cannot be told apart (" + faces + ")"; break;
-    case Status::undecided: line = "proof: NOT complete, boxes remain undecided; azeotropes may be missing"; break;
+    case Status::undecided: line = "proof: NOT complete, faces or boxes remain open; azeotropes may be missing"; break;
     case Status::stopped: line = "proof: stopped early; azeotropes may be missing"; break;
     case Status::not_run:
     case Status::not_applicable: line = "proof: not run; azeotropes were located, others may exist"; break;

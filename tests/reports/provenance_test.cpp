@@ -20,6 +20,7 @@ TEST(Provenance, EveryNumberHasALineThatResolves) {
   EXPECT_TRUE(any_contains(answer.provenance, "vapour pressure of acetone: acetone/"));
   EXPECT_TRUE(any_contains(answer.provenance, "activity coefficients: "));
   EXPECT_TRUE(any_contains(answer.provenance, "measured azeotrope, tier A"));
+  EXPECT_TRUE(any_contains(answer.provenance, "caution C12: "));
   EXPECT_TRUE(any_contains(answer.provenance, "flash point of methanol: "));
   for (const MixtureComponent& component : answer.mixture.components()) {
     const std::string key = component.pressure.set().source;
