@@ -3,7 +3,8 @@
 /// Every model is a class with
 ///     template <class S> Vec<S> ln_gamma(const S& temperature_K, const Vec<S>& x) const;
 ///     template <class S> void ln_gamma_with_gradient(const S& temperature_K, const Vec<S>& x,
-///                                                    LnGammaGradient<S>& out) const;   // analytic, models/gradient.hpp
+///                                                    LnGammaGradient<S>& out) const;   // analytic,
+///                                                    models/gradient.hpp
 ///     int size() const;
 ///     bool depends_on_temperature() const;
 ///     Model face(const Members& members) const;   // the same model for some of the components, in the order given
