@@ -22,7 +22,7 @@ scripts/check_layers.sh
 echo "== map"
 scripts/check_map.sh
 echo "== data"
-python3 scripts/check_params.py
+/usr/bin/python3 scripts/check_params.py
 echo "== clang-tidy on files changed since $base"
 cmake --preset clang --log-level=WARNING
 mapfile -t changed < <(git diff --name-only --diff-filter=d "$base" -- 'params/*.cpp' 'models/*.cpp' 'engine/*.cpp' 'reports/*.cpp')
