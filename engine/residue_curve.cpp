@@ -86,27 +86,49 @@ std::vector<int> possible_ends(const std::vector<FixedPoint>& fixed_points, cons
   return ends;
 }
 
-/// Appends points of the Hermite cubic between two recorded states so that chords stay within `chord`.
-void append_refined(const State& x0, const State& d0, const State& x1, const State& d1, double step, double t0,
-                    double t1, int n, double chord, Curve& curve) {
-  const auto at = [&](double s) {
-    State p{};
-    const double h00 = (1.0 + 2.0 * s) * (1.0 - s) * (1.0 - s);
-    const double h10 = s * (1.0 - s) * (1.0 - s);
-    const double h01 = s * s * (3.0 - 2.0 * s);
-    const double h11 = s * s * (s - 1.0);
-    for (std::size_t i = 0; i < static_cast<std::size_t>(n); ++i) {
-      p[i] = h00 * x0[i] + h10 * step * d0[i] + h01 * x1[i] + h11 * step * d1[i];
-    }
-    return to_composition(p, n);
-  };
-  const double bend = distance(at(0.5), between(to_composition(x0, n), to_composition(x1, n), 0.5));
-  const int pieces = std::clamp(static_cast<int>(std::ceil(std::sqrt(bend / chord))), 1, 64);
-  for (int k = 1; k <= pieces; ++k) {
-    const double s = static_cast<double>(k) / pieces;
-    curve.points.push_back(k == pieces ? to_composition(x1, n) : at(s));
-    curve.temperature_K.push_back((1.0 - s) * t0 + s * t1);
+/// One recorded state of the integration.
+struct Record {
+  State x{};
+  State derivative{};
+  double xi = 0.0;
+  double temperature_K = 0.0;
+};
+
+/// The Hermite cubic between two recorded states, s from 0 to 1.
+Composition on_cubic(const Record& first, const Record& last, double s, int n) {
+  const double step = last.xi - first.xi;
+  const double h00 = (1.0 + 2.0 * s) * (1.0 - s) * (1.0 - s);
+  const double h10 = s * (1.0 - s) * (1.0 - s);
+  const double h01 = s * s * (3.0 - 2.0 * s);
+  const double h11 = s * s * (s - 1.0);
+  State p{};
+  for (std::size_t i = 0; i < static_cast<std::size_t>(n); ++i) {
+    p[i] = h00 * first.x[i] + h10 * step * first.derivative[i] + h01 * last.x[i] + h11 * step * last.derivative[i];
   }
+  return to_composition(p, n);
+}
+
+/// Appends the last record, and before it points of the cubic so that chords stay within `chord`. Their temperatures
+/// are solved for: between records they are not linear. False when one of them has no bubble point.
+bool append_refined(const Field& field, const Record& first, const Record& last, double chord, Curve& curve) {
+  const int n = field.mixture.size();
+  const double bend =
+      distance(on_cubic(first, last, 0.5, n), between(to_composition(first.x, n), to_composition(last.x, n), 0.5));
+  const int pieces = std::clamp(static_cast<int>(std::ceil(std::sqrt(bend / chord))), 1, 64);
+  for (int k = 1; k < pieces; ++k) {
+    const double s = static_cast<double>(k) / pieces;
+    const Composition x = on_cubic(first, last, s, n);
+    const double guess_K = (1.0 - s) * first.temperature_K + s * last.temperature_K;
+    const BubblePoint point = bubble_point(field.mixture, x, field.pressure_Pa, guess_K);
+    if (point.status != Status::complete) {
+      return false;
+    }
+    curve.points.push_back(x);
+    curve.temperature_K.push_back(point.temperature_K);
+  }
+  curve.points.push_back(to_composition(last.x, n));
+  curve.temperature_K.push_back(last.temperature_K);
+  return true;
 }
 
 }  // namespace
@@ -121,12 +143,12 @@ Trace trace_curve(const Mixture& mixture, double pressure_Pa, const std::vector<
   double temperature_K = 0.0;
   const Field field{mixture, pressure_Pa, static_cast<double>(direction), &temperature_K, &failed};
   auto stepper = odeint::make_controlled(options.tolerance, options.tolerance, odeint::runge_kutta_dopri5<State>());
-  State x = to_state(start);
-  State derivative{};
-  field(x, derivative, 0.0);
+  Record here;
+  here.x = to_state(start);
+  field(here.x, here.derivative, 0.0);
+  here.temperature_K = temperature_K;
   trace.curve.points.push_back(start);
   trace.curve.temperature_K.push_back(temperature_K);
-  double xi = 0.0;
   double step = 0.01;
   for (int count = 0; count < options.max_steps && !failed; ++count) {
     for (const int k : ends) {
@@ -141,11 +163,8 @@ Trace trace_curve(const Mixture& mixture, double pressure_Pa, const std::vector<
         return trace;
       }
     }
-    const State before = x;
-    const State before_derivative = derivative;
-    const double before_T = temperature_K;
-    const double before_xi = xi;
-    while (stepper.try_step(field, x, xi, step) == odeint::fail) {
+    const Record before = here;
+    while (stepper.try_step(field, here.x, here.xi, step) == odeint::fail) {
       if (failed || step < 1e-14) {
         failed = true;
         break;
@@ -154,12 +173,12 @@ Trace trace_curve(const Mixture& mixture, double pressure_Pa, const std::vector<
     if (failed) {
       break;
     }
-    x = to_state(to_composition(x, n));
-    field(x, derivative, xi);
+    here.x = to_state(to_composition(here.x, n));
+    field(here.x, here.derivative, here.xi);
+    here.temperature_K = temperature_K;
     // A step may grow without limit in slow regions; long steps are still refined below, but a cap keeps them honest.
     step = std::min(step, 2.0);
-    append_refined(before, before_derivative, x, derivative, xi - before_xi, before_T, temperature_K, n, options.chord,
-                   trace.curve);
+    failed = failed || !append_refined(field, before, here, options.chord, trace.curve);
   }
   trace.status = Status::undecided;
   return trace;

@@ -214,8 +214,8 @@ class Comparison:
 
     def follow(self, printed, through, directions, where):
         points = np.array([self.array(p) for p in printed["points"]])
-        for point, temperature in zip(points, printed["temperature_K"]):
-            self.note("T", abs(self.mixture.bubble(point, temperature)[0] - temperature), TOLERANCE_T, where)
+        self.note("T", max(abs(self.mixture.bubble(point, temperature)[0] - temperature)
+                           for point, temperature in zip(points, printed["temperature_K"])), TOLERANCE_T, where)
         for direction in directions:
             half = points[through:] if direction > 0 else points[: through + 1]
             dense = self.mixture.residue_curve(points[through], direction)

@@ -4,6 +4,7 @@
 
 #include <cmath>
 
+#include "engine/bubble_point.hpp"
 #include "engine/geometry.hpp"
 #include "tests/support/simple_mixtures.hpp"
 
@@ -37,6 +38,19 @@ TEST(ResidueCurve, KeepsTheInvariantOfConstantVolatility) {
   EXPECT_GT(checked, 30);
   EXPECT_EQ(points[static_cast<std::size_t>(*result.from)].id, "A");
   EXPECT_EQ(points[static_cast<std::size_t>(*result.to)].id, "C");
+}
+
+TEST(ResidueCurve, EveryTemperatureIsTheBubblePointOfItsComposition) {
+  const Mixture mixture = testing::margules_mixture(
+      {330.0, 355.0, 365.0}, {{0.0, 0.3, 1.4}, {0.3, 0.0, 1.2}, {1.4, 1.2, 0.0}}, {3700.0, 4800.0, 4900.0});
+  const auto points = survey(mixture, kAtmosphere_Pa).fixed_points();
+  const ResidueCurve result = residue_curve(mixture, kAtmosphere_Pa, points, {0.2, 0.5, 0.3});
+  ASSERT_EQ(result.status, Status::complete);
+  ASSERT_EQ(result.curve.points.size(), result.curve.temperature_K.size());
+  for (std::size_t k = 0; k < result.curve.points.size(); ++k) {
+    const BubblePoint boiling = bubble_point(mixture, result.curve.points[k], kAtmosphere_Pa);
+    EXPECT_NEAR(result.curve.temperature_K[k], boiling.temperature_K, 1e-8) << "point " << k;
+  }
 }
 
 TEST(ResidueCurve, TemperatureNeverFalls) {
