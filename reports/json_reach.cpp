@@ -167,6 +167,14 @@ void ResultWriter::cut(const Cut& item) {
   composition("pot_start", item.pot_start);
   composition("pot_end", item.pot_end);
   json_.member("on", item.on);
+  json_.open_array("drift");
+  for (const Cut::Piece& piece : item.drift) {
+    json_.open_object();
+    composition("mole_fractions", piece.x);
+    json_.member("share_of_charge_mole", piece.share);
+    json_.close();
+  }
+  json_.close();
   why.write(json_);
   json_.close();
 }

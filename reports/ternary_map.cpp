@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <array>
 #include <cmath>
+#include <numbers>
 
 #include "params/errors.hpp"
 #include "reports/findings.hpp"
@@ -17,6 +18,7 @@ constexpr double kWidth = 760.0;
 constexpr double kSide = 540.0;
 constexpr Point kLeftCorner{110.0, 590.0};
 constexpr double kLegendTop = 672.0;
+constexpr double kNameWeight = 6.0;  ///< a label over the name of an edge is worse than one over a curve
 
 constexpr std::array<const char*, 6> kTints = {"#f6efdf", "#e3edf2", "#ece7f3", "#e6efe0", "#f5e6e4", "#edeeee"};
 
@@ -142,16 +144,21 @@ class MapDrawing {
     }
   }
 
+  /// The name along an edge; labels keep clear of it.
   void axis_name(int k) {
     const std::string& id = answer_.mixture.component(triangle_.component(k)).id;
-    const Point middle = on_edge(k, 0.5);
-    const std::string style = text_style(13, ink::kText);
-    if (k == 0) {
-      svg_->text(middle + Point{-46.0, -24.0}, id + ", mol% →", style, Anchor::middle, -60.0);
-    } else if (k == 1) {
-      svg_->text(middle + Point{0.0, 40.0}, "← " + id + ", mol%", style, Anchor::middle);
-    } else {
-      svg_->text(middle + Point{46.0, -24.0}, id + ", mol% →", style, Anchor::middle, 60.0);
+    const std::string words = k == 1 ? "← " + id + ", mol%" : id + ", mol% →";
+    const Point middle = on_edge(k, 0.5) + (k == 0   ? Point{-46.0, -24.0}
+                                            : k == 1 ? Point{0.0, 40.0}
+                                                     : Point{46.0, -24.0});
+    const double degrees = k == 0 ? -60.0 : k == 1 ? 0.0 : 60.0;
+    svg_->text(middle, words, text_style(13, ink::kText), Anchor::middle, degrees);
+    const double half = 0.5 * text_width(words, 13.0);
+    const double radians = degrees * std::numbers::pi / 180.0;
+    const Point along{half * std::cos(radians), half * std::sin(radians)};
+    for (const double above : {0.0, 10.0}) {  // foot and head of the letters
+      const Point centre = middle + Point{above * std::sin(radians), -above * std::cos(radians)};
+      placer_.keep_clear({centre - along, centre + along}, kNameWeight);
     }
   }
 

@@ -10,6 +10,7 @@
 
 #include "engine/stability.hpp"
 #include "engine/survey.hpp"
+#include "tests/support/independent_search.hpp"
 #include "tests/support/random_mixtures.hpp"
 
 namespace stillshed {

@@ -30,6 +30,17 @@ TEST(JsonReach, DriftingCutHasTwoEndsAndNoFixedPoint) {
   EXPECT_DOUBLE_EQ(cut["temperature_K"][0].get<double>(), 337.7);
 }
 
+TEST(JsonReach, DriftIsWrittenPieceByPiece) {
+  Answer answer = sample::ternary();
+  Cut& drifting = answer.reach->batch[0].cuts[1];
+  drifting.drift = {{drifting.start, 0.25 * drifting.share}, {drifting.end, 0.75 * drifting.share}};
+  const Json cuts = Json::parse(json_text(answer))["batch"][0]["cuts"];
+  EXPECT_TRUE(cuts[0]["drift"].empty());
+  ASSERT_EQ(cuts[1]["drift"].size(), 2U);
+  EXPECT_EQ(cuts[1]["drift"][0]["mole_fractions"], cuts[1]["start"]);
+  EXPECT_DOUBLE_EQ(cuts[1]["drift"][1]["share_of_charge_mole"].get<double>(), 0.75 * drifting.share);
+}
+
 TEST(JsonReach, ColumnsCloseTheirBalance) {
   const Json column = Json::parse(json_text(sample::ternary()))["sequences"][0]["columns"][0];
   EXPECT_NEAR(column["distillate"]["share_of_charge_mole"].get<double>() +

@@ -5,7 +5,6 @@
 #pragma once
 
 #include <cstdint>
-#include <functional>
 #include <random>
 #include <vector>
 
@@ -60,16 +59,5 @@ struct KnownCase {
 [[nodiscard]] KnownCase near_corner(Random& random, double trace);
 /// Ternary Margules with one azeotrope at a fraction of `trace` of the third component; the list is complete.
 [[nodiscard]] KnownCase near_edge(Random& random, double trace);
-
-/// Roots of the open face by Newton with difference quotients from `starts` random points: an independent, incomplete
-/// search with its own equations (y_i/x_i equal for all members, bubble temperature eliminated).
-[[nodiscard]] std::vector<KnownRoot> search_independently(const Mixture& mixture, const Members& members,
-                                                          double pressure_Pa, int starts, Random& random);
-
-/// All roots of g on (0, 1): sign changes on a grid that is geometric towards both ends, then bisection.
-[[nodiscard]] std::vector<double> roots_on_unit_interval(const std::function<double(double)>& g);
-
-/// Largest |ln K_i| of the members at a root.
-[[nodiscard]] double residual(const Mixture& mixture, const KnownRoot& root, double pressure_Pa);
 
 }  // namespace stillshed::testing
